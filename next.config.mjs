@@ -1,0 +1,15 @@
+/** @type {import('next').NextConfig} */
+const config = {
+  // NEXT_DIST_DIR lets a test build stand beside the one that `npm start` serves.
+  distDir: process.env.NEXT_DIST_DIR ?? '.next',
+  poweredByHeader: false,
+  reactStrictMode: true,
+  agentRules: false,
+  productionBrowserSourceMaps: false,
+  images: { unoptimized: true },
+  serverExternalPackages: ['sequelize', 'pg', 'jimp', 'multer', 'umzug', '@node-rs/argon2', 'pino'],
+  outputFileTracingRoot: import.meta.dirname,
+  turbopack: { root: import.meta.dirname },
+};
+
+export default config;
