@@ -1,0 +1,3 @@
+import { listCategoriesRoute } from '@/lib/catalogue/handlers';
+
+export const GET = listCategoriesRoute.handler;

@@ -1,0 +1,3 @@
+import { getDeviceRoute } from '@/lib/catalogue/handlers';
+
+export const GET = getDeviceRoute.handler;

@@ -1,0 +1,3 @@
+import { listDevicesRoute } from '@/lib/catalogue/handlers';
+
+export const GET = listDevicesRoute.handler;
