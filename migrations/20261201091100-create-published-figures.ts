@@ -11,6 +11,7 @@ const KEY = `
 const STATISTICS = `
       n integer not null check (n >= 0),
       median double precision,
+      median_low double precision,
       lower_quartile double precision,
       upper_quartile double precision,
       minimum double precision,

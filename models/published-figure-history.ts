@@ -21,6 +21,7 @@ export class PublishedFigureHistory extends Model<
   declare supplyStratum: 'ac-any' | 'ac-230' | 'ac-120' | 'dc';
   declare n: number;
   declare median: CreationOptional<number | null>;
+  declare medianLow: CreationOptional<number | null>;
   declare lowerQuartile: CreationOptional<number | null>;
   declare upperQuartile: CreationOptional<number | null>;
   declare minimum: CreationOptional<number | null>;
@@ -57,6 +58,7 @@ export function initPublishedFigureHistory(sequelize: Sequelize) {
       supplyStratum: { type: DataTypes.TEXT, allowNull: false },
       n: { type: DataTypes.INTEGER, allowNull: false },
       median: { type: DataTypes.DOUBLE },
+      medianLow: { type: DataTypes.DOUBLE },
       lowerQuartile: { type: DataTypes.DOUBLE },
       upperQuartile: { type: DataTypes.DOUBLE },
       minimum: { type: DataTypes.DOUBLE },

@@ -29,9 +29,7 @@ export function logGamma(x: number): number {
 export function incompleteBeta(x: number, a: number, b: number): number {
   if (!(x >= 0 && x <= 1) || !(a > 0) || !(b > 0)) throw new RangeError('I_x(a, b) needs 0 ≤ x ≤ 1, a > 0, b > 0.');
   if (x === 0 || x === 1) return x;
-  const front = Math.exp(
-    logGamma(a + b) - logGamma(a) - logGamma(b) + a * Math.log(x) + b * Math.log1p(-x),
-  );
+  const front = Math.exp(logGamma(a + b) - logGamma(a) - logGamma(b) + a * Math.log(x) + b * Math.log1p(-x));
   // The fraction converges fast on this side of the mean; the other side is its mirror.
   if (x < (a + 1) / (a + b + 2)) return (front * continuedFraction(x, a, b)) / a;
   return 1 - (front * continuedFraction(1 - x, b, a)) / b;
