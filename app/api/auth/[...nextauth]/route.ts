@@ -1,0 +1,3 @@
+import { nextAuthHandler } from '@/lib/auth/handlers/next-auth';
+
+export { nextAuthHandler as GET, nextAuthHandler as POST };
