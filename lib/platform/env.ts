@@ -77,3 +77,8 @@ export function env(): Environment {
   };
   return known;
 }
+
+/** Whether this is the demonstration, known without the other settings: pages made by the build need it too. */
+export function runsAsDemonstration(): boolean {
+  return process.env.DEMO === '1';
+}
