@@ -5,15 +5,20 @@ const LARGEST_Z = 3.5;
 const SCORES_FROM = 5;
 const LARGEST_FACTOR = 5;
 
+/** What 0 and less count as: they have no logarithm, and lie further below any reading than a factor can say. */
+const LEAST_VALUE = Number.MIN_VALUE;
+
 export interface Flaggable {
+  /** A censored one's is its limit: it lies somewhere at or below. */
   value: number;
   censored: boolean;
 }
 
 /**
  * Which values a moderator should look at: those whose logarithm lies more than 3.5 modified z-scores from the
- * median's (from five uncensored values), and those more than a factor of five from the category's median. A flag
- * drops nothing; the figure counts until it is set aside with a reason.
+ * median's (from five values; censored ones have no score and don't count here), and those more than a factor of five
+ * from the category's median, a censored one where even its limit is that far below. A flag drops nothing; the figure
+ * counts until it is set aside with a reason.
  *
  * Source: Iglewicz and Hoaglin (1993) for the score; the least MAD of 0.0675 (10 % as a standard deviation) keeps
  * values that agree closely from flagging one another.
@@ -22,22 +27,22 @@ export interface Flaggable {
  * @example findFlags([1, 1, 1, 1, 10].map((value) => ({ value, censored: false })), null)[4] // true
  */
 export function findFlags(values: readonly Flaggable[], categoryMedian: number | null): boolean[] {
-  const scored = values.map((item, index) => ({ ...item, index })).filter((item) => !item.censored && item.value > 0);
-  const flags = values.map(() => false);
-  if (scored.length >= SCORES_FROM) {
-    const scores = modifiedZScores(
-      scored.map((item) => Math.log(item.value)),
-      LEAST_MAD,
-    );
-    scored.forEach((item, i) => {
-      if (Math.abs(scores[i] as number) > LARGEST_Z) flags[item.index] = true;
-    });
-  }
-  if (categoryMedian !== null && categoryMedian > 0) {
-    for (const item of scored) {
-      const factor = item.value / categoryMedian;
-      if (factor > LARGEST_FACTOR || factor < 1 / LARGEST_FACTOR) flags[item.index] = true;
-    }
-  }
-  return flags;
+  const scores = scoresOf(values);
+  const farFromCategory = ({ value, censored }: Flaggable) =>
+    categoryMedian !== null &&
+    categoryMedian > 0 &&
+    ((!censored && value > LARGEST_FACTOR * categoryMedian) || LARGEST_FACTOR * value < categoryMedian);
+  return values.map((item, i) => Math.abs(scores[i] ?? 0) > LARGEST_Z || farFromCategory(item));
+}
+
+/** The score of each value, null where it has none. */
+function scoresOf(values: readonly Flaggable[]): (number | null)[] {
+  const uncensored = values.filter((item) => !item.censored);
+  if (uncensored.length < SCORES_FROM) return values.map(() => null);
+  const scores = modifiedZScores(
+    uncensored.map((item) => Math.log(Math.max(item.value, LEAST_VALUE))),
+    LEAST_MAD,
+  );
+  let next = 0;
+  return values.map((item) => (item.censored ? null : (scores[next++] as number)));
 }

@@ -33,6 +33,7 @@ export function publishCategoryFigure(devices: readonly DeviceFigure[], counts: 
   const summary = summarise(
     sorted.map((device) => device.medianLow),
     sorted.map((device) => device.median),
+    true,
   );
   const flags = findFlags(
     sorted.map(({ median, medianLow }) => ({ value: median, censored: median !== medianLow })),

@@ -39,6 +39,18 @@ export interface FigureInput {
   reason: string | null;
 }
 
+/** Every statistic of a pile. */
+export type StatisticName =
+  | 'median'
+  | 'minimum'
+  | 'maximum'
+  | 'lowerQuartile'
+  | 'upperQuartile'
+  | 'intervalLow'
+  | 'intervalHigh'
+  | 'tenthPercentile'
+  | 'ninetiethPercentile';
+
 export interface Counts {
   devices: number;
   contributors: number;
@@ -65,6 +77,8 @@ export interface PublishedFigure {
   ninetiethPercentile: number | null;
   /** Censored figures leave the median open below: it is at most this. */
   atMost: boolean;
+  /** Every statistic that censored figures leave open below: it is at most what stands here. */
+  atMostOf: StatisticName[];
   standardUncertainty: number | null;
   degreesOfFreedom: number | null;
   flagged: number;

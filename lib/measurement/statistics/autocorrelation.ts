@@ -5,7 +5,7 @@ import { mean } from './mean';
  * The autocorrelation at a lag: Σ (y_i − ȳ)(y_{i−lag} − ȳ) / Σ (y_i − ȳ)².
  *
  * Source: NIST StRD, univariate summary statistics, lag-1 autocorrelation.
- * @param values n ≥ 2, in order.
+ * @param values n ≥ 2, in order; a NaN among them makes the result NaN.
  * @returns 0 where all values are equal: nothing varies, so nothing follows from the one before.
  * @throws {RangeError} below two values, or where the lag is not between 1 and n − 1.
  * @example autocorrelation([10000001, 10000003, 10000002], 1) // -0.5

@@ -2,7 +2,7 @@
  * The sum of numbers with Neumaier's compensation, so that small terms beside large ones are not lost.
  *
  * Method: Neumaier (1974), improved Kahan–Babuška summation.
- * @param values any length; the sum of none is 0.
+ * @param values any length; the sum of none is 0. A term that is NaN or infinite makes the sum NaN.
  * @example compensatedSum([1, 1e100, 1, -1e100]) // 2
  */
 export function compensatedSum(values: ArrayLike<number>): number {

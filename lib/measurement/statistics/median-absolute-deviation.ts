@@ -8,7 +8,7 @@ export const MAD_TO_STANDARD_DEVIATION = 1.482602218505602;
  *
  * Source: Iglewicz and Hoaglin (1993); R's mad(constant = 1).
  * @param values n ≥ 1.
- * @throws {RangeError} on an empty list.
+ * @throws {RangeError} on an empty list, or where a value is NaN or infinite.
  * @example medianAbsoluteDeviation([1, 1, 2, 2, 4, 6, 9]) // 1
  */
 export function medianAbsoluteDeviation(values: ArrayLike<number>): number {

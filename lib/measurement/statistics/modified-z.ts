@@ -7,7 +7,7 @@ import { medianAbsoluteDeviation } from './median-absolute-deviation';
  * Source: Iglewicz and Hoaglin (1993), who flag a size above 3.5.
  * @param values n ≥ 1.
  * @param leastDeviation the smallest MAD to divide by: values that agree closely must not flag one another.
- * @throws {RangeError} on an empty list, or where leastDeviation is not above 0.
+ * @throws {RangeError} on an empty list, where a value is NaN or infinite, or where leastDeviation is not above 0.
  * @example modifiedZScores([10, 10, 10, 11], 1) // [0, 0, 0, 0.6745]
  */
 export function modifiedZScores(values: ArrayLike<number>, leastDeviation: number): number[] {

@@ -18,7 +18,17 @@ export function quantileType7(sorted: ArrayLike<number>, p: number): number {
   return low + (position - below) * (high - low);
 }
 
-/** The values in rising order, in a new list: what the quantiles here take. */
+/**
+ * The values in rising order, in a new list: what the quantiles here take.
+ *
+ * @throws {RangeError} where a value is NaN or infinite: it has no place in an order, and would move every rank.
+ * @example sortedCopy([3, 1, 2]) // Float64Array [1, 2, 3]
+ */
 export function sortedCopy(values: ArrayLike<number>): Float64Array {
-  return Float64Array.from(values).sort();
+  const sorted = Float64Array.from(values).sort();
+  // Sorting puts −Infinity first, and Infinity and then NaN last: the two ends tell for all.
+  if (sorted.length > 0 && !(Number.isFinite(sorted[0]) && Number.isFinite(sorted[sorted.length - 1]))) {
+    throw new RangeError('Order statistics need finite numbers.');
+  }
+  return sorted;
 }

@@ -6,7 +6,7 @@ import { mean } from './mean';
  * turn negative where the values are large and close together.
  *
  * Method: Chan, Golub and LeVeque (1983), corrected two-pass. Source of the check: NIST StRD.
- * @param values n ≥ 2.
+ * @param values n ≥ 2; a NaN among them makes the result NaN.
  * @throws {RangeError} below two values.
  * @example standardDeviation([10000001, 10000003, 10000002]) // 1
  */

@@ -17,7 +17,15 @@ export function studentTCdf(t: number, degreesOfFreedom: number): number {
   if (!(degreesOfFreedom > 0)) throw new RangeError('Degrees of freedom lie above 0.');
   if (Number.isNaN(t)) throw new RangeError('t is not a number.');
   if (degreesOfFreedom > NORMAL_FROM || !Number.isFinite(t)) return normalCdf(t);
-  const tail = incompleteBeta(degreesOfFreedom / (degreesOfFreedom + t * t), degreesOfFreedom / 2, 0.5) / 2;
+  const half = degreesOfFreedom / 2;
+  const square = t * t;
+  const inside = square / (degreesOfFreedom + square);
+  const outside = degreesOfFreedom / (degreesOfFreedom + square);
+  if (square < 1) {
+    const middle = incompleteBeta(inside, 0.5, half, outside) / 2;
+    return t > 0 ? 0.5 + middle : 0.5 - middle;
+  }
+  const tail = incompleteBeta(outside, half, 0.5, inside) / 2;
   return t > 0 ? 1 - tail : tail;
 }
 
