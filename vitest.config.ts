@@ -36,9 +36,9 @@ export default defineConfig({
           include: ['tests/integration/**/*.test.ts'],
           environment: 'node',
           env,
-          setupFiles: ['tests/setup/no-network.ts'],
+          setupFiles: ['tests/setup/no-network.ts', 'tests/setup/environment.ts'],
           globalSetup: ['tests/setup/cluster.ts'],
-          // One database a worker: tests may commit, lock and recompute without seeing one another.
+          // One database a run: files commit, lock and recompute, so they take turns.
           fileParallelism: false,
           testTimeout: 30_000,
           hookTimeout: 60_000,
