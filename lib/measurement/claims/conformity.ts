@@ -23,8 +23,7 @@ export function conformity(y: number, u: number, degreesOfFreedom: number, inter
     const above = interval.upper !== null && y > interval.upper ? 1 : 0;
     return { below, within: 1 - below - above, above };
   }
-  const shareUnder = (limit: number) => studentTCdf((limit - y) / u, degreesOfFreedom);
-  const below = interval.lower === null ? 0 : shareUnder(interval.lower);
-  const above = interval.upper === null ? 0 : 1 - shareUnder(interval.upper);
+  const below = interval.lower === null ? 0 : studentTCdf((interval.lower - y) / u, degreesOfFreedom);
+  const above = interval.upper === null ? 0 : studentTCdf((y - interval.upper) / u, degreesOfFreedom);
   return { below, within: Math.max(0, 1 - below - above), above };
 }

@@ -37,6 +37,13 @@ export interface ComparableFigure {
   variantId: string | null;
   /** The middle of the rooms it was measured in; null where it was not recorded. */
   ambientCelsius: number | null;
+  /** Of a device that defrosts: whether one is part of the figure, null where not stated. Left out for all others. */
+  defrostIncluded?: boolean | null;
+  /**
+   * Over which interval a maximum is averaged. A highest 10 s mean, which a claimed maximum is compared with, is taken
+   * from readings at most 5 s apart and outside start-up. Null for other quantities.
+   */
+  averagingSeconds: number | null;
   duty: Duty;
 }
 
