@@ -76,10 +76,12 @@ function claimWords({ kind, lower, upper, singleValue, unit }: StatedClaim): str
 }
 
 function limitWords(kind: ClaimKind, lower: number | null, upper: number | null, singleValue: boolean): string {
+  const single = singleValue ? (upper ?? lower) : null;
+  if (single !== null) return UPPER_LIMIT_KINDS.has(kind) ? `at most ${single}` : String(single);
   if (upper === null) return `at least ${lower}`;
-  const isLimit = lower === null && !singleValue && kind !== 'maximum';
-  if (isLimit || UPPER_LIMIT_KINDS.has(kind)) return `at most ${upper}`;
-  return lower === null || lower === upper ? String(upper) : `${lower} to ${upper}`;
+  if (UPPER_LIMIT_KINDS.has(kind)) return `at most ${upper}`;
+  if (lower === null) return kind === 'maximum' ? String(upper) : `at most ${upper}`;
+  return lower === upper ? String(upper) : `${lower} to ${upper}`;
 }
 
 function outcomeWords({ outcome, canConfirm, ratioToNearerLimit }: Parameters<typeof outcomeSentence>[2]): string {
