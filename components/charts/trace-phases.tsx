@@ -83,7 +83,6 @@ function EdgeHandle({ phases, phase, edge, word, at, timeAt, window: shown, whol
     }[event.key];
     if (by === undefined) return;
     event.preventDefault();
-    event.stopPropagation();
     move(phase[edge] + by);
   }
 

@@ -29,7 +29,7 @@ export function ErrorSummary({ errors, title = 'There is something to put right'
 
   useEffect(() => {
     if (!shown) return;
-    if (!document.title.startsWith(PREFIX)) document.title = PREFIX + document.title;
+    document.title = PREFIX + document.title;
     return () => {
       if (document.title.startsWith(PREFIX)) document.title = document.title.slice(PREFIX.length);
     };

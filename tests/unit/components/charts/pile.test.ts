@@ -65,6 +65,13 @@ describe('stackStones', () => {
     expect(swept.map((stack) => stack.centre)).toEqual([5, 25]);
   });
 
+  test('a heavy stack pushes a light one no farther than its stones reach', () => {
+    const light = [0, 20].map((at, index) => ({ id: `l${index}`, at }));
+    const heavy = Array.from({ length: 50 }, (_, index) => ({ id: `h${index}`, at: 20.5 }));
+    // The stone at 20 may stand at 10 at the lowest, so the heavy stack gives way, to 30.
+    expect(stackStones([...light, ...heavy], WIDTH).map((stack) => stack.centre)).toEqual([10, 30]);
+  });
+
   test('stones never overlap: stacks stand at least one width apart', () => {
     fc.assert(
       fc.property(stones, (any) => {
