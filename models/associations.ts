@@ -72,6 +72,7 @@ export function associate(m: Models) {
   m.Session.belongsTo(m.Member, { as: 'member', foreignKey: 'memberId' });
   m.SetAside.belongsTo(m.Member, { as: 'by', foreignKey: 'byId' });
   m.SetAside.belongsTo(m.ReportFigure, { as: 'reportFigure', foreignKey: 'reportFigureId' });
+  m.Trace.belongsTo(m.TraceUpload, { as: 'upload', foreignKey: 'uploadId' });
   m.Trace.belongsTo(m.Member, { as: 'member', foreignKey: 'memberId' });
   m.Unit.belongsTo(m.Device, { as: 'device', foreignKey: 'deviceId' });
   m.Unit.belongsTo(m.Member, { as: 'registeredBy', foreignKey: 'registeredById' });

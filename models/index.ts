@@ -38,6 +38,7 @@ import { initSession } from './session';
 import { initSetAside } from './set-aside';
 import { initSlug } from './slug';
 import { initTrace } from './trace';
+import { initTraceUpload } from './trace-upload';
 import { initUnit } from './unit';
 import { initVariant } from './variant';
 
@@ -85,6 +86,7 @@ export function initialiseModels(sequelize: Sequelize) {
     SetAside: initSetAside(sequelize),
     Slug: initSlug(sequelize),
     Trace: initTrace(sequelize),
+    TraceUpload: initTraceUpload(sequelize),
     Unit: initUnit(sequelize),
     Variant: initVariant(sequelize),
   };

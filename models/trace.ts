@@ -12,6 +12,7 @@ export class Trace extends Model<InferAttributes<Trace>, InferCreationAttributes
   declare id: CreationOptional<number>;
   declare publicId: string;
   declare memberId: number;
+  declare uploadId: number;
   declare fileName: string;
   declare fileHash: string;
   declare fileBytes: number;
@@ -38,6 +39,7 @@ export function initTrace(sequelize: Sequelize) {
       id: { type: DataTypes.INTEGER, allowNull: false, autoIncrement: true, primaryKey: true },
       publicId: { type: DataTypes.TEXT, allowNull: false },
       memberId: { type: DataTypes.INTEGER, allowNull: false },
+      uploadId: { type: DataTypes.INTEGER, allowNull: false },
       fileName: { type: DataTypes.TEXT, allowNull: false },
       fileHash: { type: DataTypes.TEXT, allowNull: false },
       fileBytes: { type: DataTypes.INTEGER, allowNull: false },

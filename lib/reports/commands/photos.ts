@@ -1,0 +1,79 @@
+import 'server-only';
+import { open, readFile } from 'node:fs/promises';
+import path from 'node:path';
+import { Op } from 'sequelize';
+import { now, secondsFromNow } from '@/lib/platform/clock';
+import { database } from '@/lib/platform/database/connection';
+import { AppError } from '@/lib/platform/errors';
+import { publicId, sha256 } from '@/lib/platform/ids';
+import { findMetadata, inspectPicture } from '@/lib/platform/pictures/inspect';
+import { shrinkPicture } from '@/lib/platform/pictures/shrink-picture';
+import { dropFile, incomingFolder, keepFile, storedName } from '@/lib/platform/storage/files';
+import type { ReceivedUpload } from '@/lib/platform/storage/receive-upload';
+
+const MOST_A_DAY = 100;
+
+export interface AcceptedPhoto {
+  publicId: string;
+  width: number;
+  height: number;
+  /** Kinds of metadata that the file carried and the photo doesn't. */
+  removedMetadata: string[];
+}
+
+/**
+ * Writes a received picture anew in two sizes, upright and without metadata, and drops what came.
+ * @throws {AppError} unsupported-kind, too-large or quota-reached, saying what to do.
+ */
+export async function acceptPhoto(memberId: number, upload: ReceivedUpload): Promise<AcceptedPhoto> {
+  const large = path.join(await incomingFolder(), storedName('jpg'));
+  const small = path.join(await incomingFolder(), storedName('jpg'));
+  try {
+    await refuseOverQuota(memberId);
+    const content = await readFile(upload.path);
+    inspectPicture(content);
+    const sizes = await shrinkPicture(upload.path, large, small);
+    const removedMetadata = findMetadata(content);
+    const [keptLarge, keptSmall] = [await keep(large), await keep(small)];
+    const row = await database().models.Attachment.create({
+      publicId: publicId(),
+      memberId,
+      originalHash: sha256(content),
+      storedLarge: keptLarge.stored,
+      largeHash: keptLarge.hash,
+      largeWidth: sizes.large.width,
+      largeHeight: sizes.large.height,
+      largeBytes: sizes.large.bytes,
+      storedSmall: keptSmall.stored,
+      smallHash: keptSmall.hash,
+      smallWidth: sizes.small.width,
+      smallHeight: sizes.small.height,
+      smallBytes: sizes.small.bytes,
+      removedMetadata,
+      licence: 'CC-BY-4.0',
+      createdAt: now(),
+    });
+    return { publicId: row.publicId, width: sizes.large.width, height: sizes.large.height, removedMetadata };
+  } finally {
+    for (const file of [upload.path, large, small]) await dropFile(file);
+  }
+}
+
+/** Moves a size to where it stays, flushed, and returns its name and hash. */
+async function keep(file: string): Promise<{ stored: string; hash: string }> {
+  const stored = storedName('jpg');
+  const hash = sha256(await readFile(file));
+  const handle = await open(file, 'r');
+  await handle.sync().finally(() => handle.close());
+  await keepFile(file, stored);
+  return { stored, hash };
+}
+
+async function refuseOverQuota(memberId: number): Promise<void> {
+  const today = await database().models.Attachment.count({
+    where: { memberId, createdAt: { [Op.gt]: secondsFromNow(-86_400) } },
+  });
+  if (today >= MOST_A_DAY) {
+    throw new AppError('quota-reached', `You have sent ${MOST_A_DAY} photos today. Go on tomorrow.`);
+  }
+}
