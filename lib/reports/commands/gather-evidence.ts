@@ -93,7 +93,11 @@ export function statedAccuracy(revision: StatedAccuracy): StatedAccuracy {
   };
 }
 
-async function findInstrument(work: Work, memberId: number, publicId: string): Promise<InstrumentRevision | null> {
+export async function findInstrument(
+  work: Work,
+  memberId: number,
+  publicId: string,
+): Promise<InstrumentRevision | null> {
   const { Instrument, InstrumentRevision: Revision } = work.models;
   const row = await Instrument.findOne({ where: { publicId, memberId }, transaction: work.transaction });
   return row?.currentRevisionId ? Revision.findByPk(row.currentRevisionId, { transaction: work.transaction }) : null;
@@ -106,7 +110,7 @@ async function findMethod(work: Work, code: string): Promise<MethodRevision | nu
     : null;
 }
 
-async function findTraces(work: Work, memberId: number, publicIds: string[]): Promise<Map<string, TraceRow>> {
+export async function findTraces(work: Work, memberId: number, publicIds: string[]): Promise<Map<string, TraceRow>> {
   const rows = await work.models.Trace.findAll({
     where: { publicId: publicIds, memberId },
     transaction: work.transaction,

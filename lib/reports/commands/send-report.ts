@@ -73,8 +73,9 @@ async function send(work: Work, options: SendOptions): Promise<string> {
       : await lockForAmending(work, memberId, options.amendsPublicId);
   const revisionId = await addRevision(work, report, category, submission, evidence);
   const before = report.state;
+  // An amendment is of the same variant and unit: moving them now would move published figures before the verdict.
   await report.update(
-    { state: 'submitted', pendingRevisionId: revisionId, submittedAt: now(), variantId, unitId },
+    { state: 'submitted', pendingRevisionId: revisionId, submittedAt: now() },
     { transaction: work.transaction },
   );
   await closeDraft(work, options);

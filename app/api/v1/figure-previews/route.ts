@@ -1,0 +1,3 @@
+import { previewFiguresRoute } from '@/lib/reports/handlers/reports';
+
+export const POST = previewFiguresRoute.handler;

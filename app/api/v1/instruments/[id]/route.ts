@@ -1,0 +1,3 @@
+import { reviseInstrumentRoute } from '@/lib/reports/handlers/instruments';
+
+export const PUT = reviseInstrumentRoute.handler;

@@ -1,0 +1,3 @@
+import { listMethodsRoute } from '@/lib/reports/handlers/reports';
+
+export const GET = listMethodsRoute.handler;

@@ -1,0 +1,3 @@
+import { getPhotoRoute } from '@/lib/reports/handlers/photos';
+
+export const GET = getPhotoRoute.handler;

@@ -1,0 +1,3 @@
+import { uploadPhotoRoute } from '@/lib/reports/handlers/photos';
+
+export const POST = uploadPhotoRoute.handler;

@@ -1,0 +1,3 @@
+import { getReportRoute } from '@/lib/reports/handlers/reports';
+
+export const GET = getReportRoute.handler;

@@ -1,0 +1,3 @@
+import { withdrawReportRoute } from '@/lib/reports/handlers/reports';
+
+export const POST = withdrawReportRoute.handler;

@@ -1,0 +1,3 @@
+import { readTraceAgainRoute } from '@/lib/reports/handlers/traces';
+
+export const POST = readTraceAgainRoute.handler;

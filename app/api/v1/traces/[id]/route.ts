@@ -1,0 +1,3 @@
+import { getTraceRoute } from '@/lib/reports/handlers/traces';
+
+export const GET = getTraceRoute.handler;

@@ -1,0 +1,3 @@
+import { downloadTraceRoute } from '@/lib/reports/handlers/traces';
+
+export const GET = downloadTraceRoute.handler;

@@ -1,0 +1,3 @@
+import { getTraceWindowRoute } from '@/lib/reports/handlers/traces';
+
+export const GET = getTraceWindowRoute.handler;

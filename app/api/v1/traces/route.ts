@@ -1,0 +1,3 @@
+import { uploadTraceRoute } from '@/lib/reports/handlers/traces';
+
+export const POST = uploadTraceRoute.handler;

@@ -1,0 +1,3 @@
+export * from './content';
+export * from './instrument';
+export * from './view';
