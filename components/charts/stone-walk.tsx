@@ -45,7 +45,7 @@ export function StoneWalk({ label, children }: { label: string; children: ReactN
       (mark) => mark.dataset.stone === stone,
     );
 
-  /** Above the stone and inside the picture. Through the object model, since the content policy allows no style attribute. */
+  /** Above the stone and inside the picture: its share of the width is also how much of the tag lies left of it. */
   function place(mark: Element | undefined) {
     if (!box.current || !tag.current || !mark) return;
     const frame = box.current.getBoundingClientRect();

@@ -48,7 +48,7 @@ export function PageTitle({ children, lead }: PageTitleProps) {
 
 interface SectionProps {
   title: string;
-  /** For links to this place, and the section's name. */
+  /** For links to this place. */
   id?: string;
   /** Right of the title: a link or a small control. */
   aside?: ReactNode;
@@ -59,7 +59,7 @@ interface SectionProps {
 
 export function Section({ title, id, aside, ruled = true, children }: SectionProps) {
   return (
-    <section className="mt-12" id={id} aria-label={title}>
+    <section className="mt-12" id={id}>
       <div
         className={`flex flex-wrap items-baseline justify-between gap-x-6 pb-2 ${ruled ? 'border-b border-rule' : ''}`}
       >

@@ -13,7 +13,7 @@ interface SheetProps {
  * on a wide screen; the sheet itself is the ::before that spans the two rows.
  */
 const SHEET_BEHIND =
-  "lg:before:content-[''] lg:before:row-start-1 lg:before:row-span-2 lg:before:rounded-sheet lg:before:border lg:before:border-rule lg:before:bg-sheet";
+  "lg:before:content-[''] lg:before:row-start-1 lg:before:row-span-2 lg:before:rounded-sheet lg:before:border lg:before:border-rule lg:before:bg-sheet print:before:hidden";
 
 export function Sheet({ head, margin, children }: SheetProps) {
   const width = margin ? 'max-w-page lg:grid-cols-[244px_minmax(0,1fr)]' : 'max-w-[62rem]';

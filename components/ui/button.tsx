@@ -14,7 +14,7 @@ const looks: Record<Look, string> = {
 };
 
 const base =
-  'inline-flex items-center justify-center gap-2 rounded text-note aria-disabled:cursor-not-allowed aria-disabled:opacity-60';
+  'inline-flex items-center justify-center gap-2 rounded text-note print:hidden aria-disabled:cursor-not-allowed aria-disabled:opacity-60';
 
 interface ButtonProps extends Omit<ComponentProps<'button'>, 'disabled'> {
   look?: Look;

@@ -17,9 +17,9 @@ export function Toaster() {
         unstyled: true,
         classNames: {
           toast:
-            'flex w-full items-center justify-between gap-4 rounded border border-ink bg-ink px-4 py-3 text-note text-paper',
-          actionButton: 'target px-2 font-semibold underline underline-offset-4',
-          cancelButton: 'target px-2 underline underline-offset-4',
+            'flex w-full items-center justify-between gap-4 rounded border border-ink bg-ink px-4 py-3 font-text! text-note text-paper',
+          actionButton: 'target shrink-0 px-2 font-semibold whitespace-nowrap underline underline-offset-4',
+          cancelButton: 'target shrink-0 px-2 whitespace-nowrap underline underline-offset-4',
         },
       }}
     />
