@@ -1,0 +1,3 @@
+import { endSessionRoute } from '@/lib/members/handlers';
+
+export const DELETE = endSessionRoute.handler;

@@ -1,0 +1,3 @@
+import { confirmAddressRoute } from '@/lib/members/handlers';
+
+export const POST = confirmAddressRoute.handler;

@@ -1,0 +1,3 @@
+import { signUpRoute } from '@/lib/members/handlers';
+
+export const POST = signUpRoute.handler;
