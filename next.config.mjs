@@ -2,6 +2,11 @@
 const config = {
   // NEXT_DIST_DIR lets a test build stand beside the one that `npm start` serves.
   distDir: process.env.NEXT_DIST_DIR ?? '.next',
+  // Ours never serves what a commit made stale; Next's own did, in memory and from disk.
+  cacheHandler: `${import.meta.dirname}/lib/platform/cache/handler.mjs`,
+  cacheMaxMemorySize: 0,
+  // The server compresses, after it has read which scripts a page holds.
+  compress: false,
   poweredByHeader: false,
   reactStrictMode: true,
   agentRules: false,

@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto';
+import { askAgain, watchReading } from './fresh-answer.mjs';
 
 /**
  * Headers that every answer carries. A route may say something narrower for itself (a photo is sandboxed).
@@ -43,6 +44,7 @@ export function contentPolicy(scriptHashes) {
  */
 const OURS = [
   /^\(?self\.__next_f/,
+  /^\(globalThis\["TURBOPACK"\]/,
   /^\$R[A-Z]/,
   /^requestAnimationFrame\(function\(\)\{\$R/,
   /^try\{const t=localStorage\.getItem\('wattcairn-theme'\)/,
@@ -61,17 +63,20 @@ export function inlineScriptHashes(html) {
 }
 
 /**
- * Holds an HTML answer back until it is whole, so that its header can name its scripts, and keeps shared caches from
- * holding pages for long: the framework would let a proxy keep a page for a year.
+ * Holds a page back until it is whole, so that its header can name its scripts and a page from before a commit can be
+ * asked for again; and keeps shared caches from holding pages for long: the framework would let them for a year.
+ * @param {import('node:http').IncomingMessage} request
  * @param {import('node:http').ServerResponse} response
  */
-export function governResponse(response) {
+export function governResponse(request, response) {
   const write = response.write.bind(response);
   const end = response.end.bind(response);
   const setHeader = response.setHeader.bind(response);
   const writeHead = response.writeHead.bind(response);
+  const reader = watchReading(response);
   /** @type {Buffer[]} */
   const held = [];
+  let whole = false;
 
   response.setHeader = (name, value) =>
     setHeader(name, name.toLowerCase() === 'cache-control' && String(value).includes('s-maxage') ? 'no-cache' : value);
@@ -83,25 +88,51 @@ export function governResponse(response) {
     }
     response.statusCode = status;
     // The head goes out with the body: until then the policy isn't known.
-    return isHtml() ? response : writeHead(status);
+    return isHeld() && !whole ? response : writeHead(status);
   };
   response.write = (chunk, ...rest) => {
-    if (!isHtml()) return write(chunk, ...rest);
-    held.push(Buffer.from(chunk, typeof rest[0] === 'string' ? rest[0] : undefined));
+    if (!isHeld()) return write(chunk, ...rest);
+    held.push(bytesOf(chunk, rest[0]));
     rest.find((argument) => typeof argument === 'function')?.();
     return true;
   };
   response.end = (chunk, ...rest) => {
-    if (!isHtml() || response.headersSent) return end(chunk, ...rest);
-    if (chunk && typeof chunk !== 'function')
-      held.push(Buffer.from(chunk, typeof rest[0] === 'string' ? rest[0] : undefined));
-    const page = Buffer.concat(held);
-    setHeader('content-security-policy', contentPolicy(inlineScriptHashes(page.toString('utf8'))));
+    if (response.headersSent || !isHeld()) return end(chunk, ...rest);
+    if (chunk && typeof chunk !== 'function') held.push(bytesOf(chunk, rest[0]));
     const done = [chunk, ...rest].find((argument) => typeof argument === 'function');
-    return done ? end(page, done) : end(page);
+    if (reader.outdated) askAgain(request, (...answer) => send(...answer, done));
+    else send(response.statusCode, {}, Buffer.concat(held), done);
+    return response;
   };
+
+  function send(status, headers, body, done) {
+    whole = true;
+    response.statusCode = status;
+    for (const [name, value] of Object.entries(headers)) if (value !== undefined) setHeader(name, value);
+    // A browser puts the headers of a 304 in place of those it kept: it must keep the policy that names the scripts.
+    if (status === 304) response.removeHeader('content-security-policy');
+    else if (isHtml()) setHeader('content-security-policy', contentPolicy(inlineScriptHashes(body.toString('utf8'))));
+    if (body.length > 0 && response.hasHeader('content-length')) setHeader('content-length', body.length);
+    end(body, done);
+  }
 
   function isHtml() {
     return String(response.getHeader('content-type') ?? '').startsWith('text/html');
   }
+
+  // A page, what the browser fetches in its place, or the word that neither has changed.
+  function isHeld() {
+    const component = String(response.getHeader('content-type') ?? '').startsWith('text/x-component');
+    return component || isHtml() || response.statusCode === 304;
+  }
+}
+
+/**
+ * @param {string | Uint8Array} chunk
+ * @param {unknown} encoding
+ */
+function bytesOf(chunk, encoding) {
+  return typeof chunk === 'string'
+    ? Buffer.from(chunk, typeof encoding === 'string' ? /** @type {BufferEncoding} */ (encoding) : 'utf8')
+    : Buffer.from(chunk);
 }

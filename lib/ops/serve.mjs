@@ -49,7 +49,7 @@ const server = http.createServer((request, response) => {
   }
   if (development) return void handle(request, response);
   compress(request, response, () => {
-    governResponse(response);
+    governResponse(request, response);
     void handle(request, response);
   });
 });
