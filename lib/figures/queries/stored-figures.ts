@@ -20,7 +20,8 @@ interface Row extends FigureColumns {
   categoryId: number | null;
 }
 
-const FIGURE_COLUMNS = `
+/** The columns of a published figure f in scope s, by the names that the code has for them. */
+export const FIGURE_COLUMNS = `
   f.id, s.device_id as "deviceId", s.category_id as "categoryId", f.variant_id as "variantId", f.mode_id as "modeId",
   f.quantity, f.power_kind as "powerKind", f.supply_stratum as "supplyStratum", f.n, f.median,
   f.median_low as "medianLow", f.lower_quartile as "lowerQuartile", f.upper_quartile as "upperQuartile", f.minimum,

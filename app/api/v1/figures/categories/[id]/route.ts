@@ -1,0 +1,3 @@
+import { getCategoryFiguresRoute } from '@/lib/figures/handlers';
+
+export const GET = getCategoryFiguresRoute.handler;

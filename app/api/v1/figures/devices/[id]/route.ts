@@ -1,0 +1,3 @@
+import { getDeviceFiguresRoute } from '@/lib/figures/handlers';
+
+export const GET = getDeviceFiguresRoute.handler;

@@ -1,0 +1,3 @@
+import { getReceiptRoute } from '@/lib/figures/handlers';
+
+export const GET = getReceiptRoute.handler;

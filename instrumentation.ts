@@ -1,0 +1,5 @@
+/** Next runs this once when the server starts, before the first request. */
+export async function register(): Promise<void> {
+  // The bundler replaces this variable; without it the edge's copy would want a database driver.
+  if (process.env.NEXT_RUNTIME === 'nodejs') await import('@/lib/figures/register');
+}
