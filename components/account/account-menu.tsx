@@ -1,29 +1,19 @@
 'use client';
 
-import { useState } from 'react';
 import Link from 'next/link';
-import { useQuery } from '@tanstack/react-query';
-
-interface SessionAnswer {
-  member: { id: string; name: string; role: 'member' | 'moderator' | 'admin' } | null;
-}
-
-async function fetchSession(): Promise<SessionAnswer> {
-  const response = await fetch('/api/v1/session', { headers: { accept: 'application/json' } });
-  if (!response.ok) throw new Error(`The session could not be read: ${response.status}`);
-  return (await response.json()) as SessionAnswer;
-}
+import { useState } from 'react';
+import { useSession } from './session';
 
 const item = 'target flex items-center border-t border-rule px-4 whitespace-nowrap hover:underline';
 
-/** The signed-in corner. Pages are the same for everybody, so who is reading is asked by the browser. */
+/** The signed-in corner. */
 export function AccountMenu() {
-  const { data } = useQuery({ queryKey: ['session'], queryFn: fetchSession });
+  const { data } = useSession();
   const [open, setOpen] = useState(false);
   const member = data?.member;
   if (!member) {
     return (
-      <Link href="/sign-in" className="flex target items-center underline-offset-4 hover:underline">
+      <Link href="/sign-in" className="flex target items-center whitespace-nowrap underline-offset-4 hover:underline">
         Sign in
       </Link>
     );
@@ -46,9 +36,10 @@ export function AccountMenu() {
       <div
         id="account-menu"
         hidden={!open}
+        onClick={() => setOpen(false)}
         className="absolute top-full right-0 z-20 rounded border border-ink bg-sheet"
       >
-        <p className="px-4 py-2 text-caption text-muted">{member.name}</p>
+        <p className="max-w-64 truncate px-4 py-2 text-caption text-muted">{member.name}</p>
         <Link className={item} href="/reports/new">
           Add a measurement
         </Link>
@@ -58,7 +49,7 @@ export function AccountMenu() {
           </Link>
         )}
         <Link className={item} href="/account">
-          Account
+          My account
         </Link>
         <Link className={item} href="/sign-out" prefetch={false}>
           Sign out
