@@ -4,7 +4,9 @@ import { findCycles } from '@/lib/measurement/phases/cycles';
 import { stretchFigures } from '@/lib/measurement/traces/figures';
 import { traceWindow } from '@/lib/measurement/traces/levels';
 import { AppError } from '@/lib/platform/errors';
+import { fieldProblems } from '@/lib/platform/http/problem';
 import { defineRoute } from '@/lib/platform/http/route';
+import { dropFile } from '@/lib/platform/storage/files';
 import { receiveUpload } from '@/lib/platform/storage/receive-upload';
 import { acceptTrace, readAgain } from '../commands/traces';
 import { readSeries, summariseTrace, visibleTrace } from '../queries/traces';
@@ -13,6 +15,23 @@ import { traceCorrections, traceReading, zoneName } from '../schema/trace';
 
 const MOST_BYTES = 64_000_000;
 const params = z.object({ id: z.string() });
+
+/** The fields beside the file; corrections come as JSON, since a multipart field is a text. */
+const uploadFields = z.object({
+  zone: zoneName.default('UTC'),
+  corrections: z
+    .string()
+    .default('{}')
+    .transform((text, context) => {
+      try {
+        return JSON.parse(text) as unknown;
+      } catch {
+        context.addIssue({ code: 'custom', message: 'The corrections are no JSON.' });
+        return z.NEVER;
+      }
+    })
+    .pipe(traceCorrections),
+});
 
 export const uploadTraceRoute = defineRoute({
   operationId: 'uploadTrace',

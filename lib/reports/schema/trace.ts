@@ -1,10 +1,19 @@
 import { z } from 'zod';
 import type { TraceCorrections, TraceDescription } from '@/lib/measurement/traces/import/types';
 
-const ZONES = new Set(['UTC', ...Intl.supportedValuesOf('timeZone')]);
+/** An IANA zone that this machine knows, by any of its names. */
+export const zoneName = z
+  .string()
+  .max(60)
+  .refine(isZone, 'This is no time zone that is known. Choose one from the list.');
 
-/** An IANA zone that this machine knows. */
-export const zoneName = z.string().refine((name) => ZONES.has(name), 'Choose a time zone from the list.');
+function isZone(name: string): boolean {
+  try {
+    return new Intl.DateTimeFormat('en', { timeZone: name }).resolvedOptions().timeZone !== '';
+  } catch {
+    return false;
+  }
+}
 
 const TIME_FORMATS = [
   'iso',
