@@ -3,7 +3,7 @@ import { existsSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'no
 import path from 'node:path';
 import { run, say } from './console.mjs';
 
-const SOURCES = ['app', 'components', 'lib', 'models', 'public', 'migrations'];
+const SOURCES = ['app', 'components', 'lib', 'models', 'public', 'seeders'];
 const FILES = [
   'package-lock.json',
   'next.config.mjs',

@@ -19,12 +19,16 @@ export async function ensureDependencies(root) {
   writeFileSync(mark, lock);
 }
 
-/** The folder with initdb and postgres, the newest first, or null. */
-export function findPostgres() {
+/**
+ * The folder with initdb and pg_ctl, the newest first, or null.
+ * @param {string | null} major the only version that can run a cluster that exists.
+ */
+export function findPostgres(major = null) {
   const installed = '/usr/lib/postgresql';
   const versions = existsSync(installed) ? readdirSync(installed).map(Number).filter(Boolean) : [];
-  const folders = versions.sort((a, b) => b - a).map((version) => path.join(installed, String(version), 'bin'));
-  const onPath = (process.env.PATH ?? '').split(path.delimiter);
+  const wanted = versions.sort((a, b) => b - a).filter((version) => major === null || String(version) === major);
+  const folders = wanted.map((version) => path.join(installed, String(version), 'bin'));
+  const onPath = major === null ? (process.env.PATH ?? '').split(path.delimiter) : [];
   return (
     [...folders, ...onPath].find(
       (folder) => existsSync(path.join(folder, 'initdb')) && existsSync(path.join(folder, 'pg_ctl')),
@@ -32,20 +36,24 @@ export function findPostgres() {
   );
 }
 
-/** PostgreSQL's server binaries; installs Debian's package where there are none. */
-export async function ensurePostgres() {
-  const found = findPostgres();
+/**
+ * PostgreSQL's server binaries; installs Debian's package where there are none.
+ * @param {string | null} major as the cluster that exists needs it.
+ */
+export async function ensurePostgres(major) {
+  const found = findPostgres(major);
   if (found) return found;
+  // Installed by hand, outside Debian's folders: the one on the path has to do.
+  const other = findPostgres();
+  if (other && !other.startsWith('/usr/lib/postgresql/')) return other;
   // Debian's package would otherwise make and start a cluster of its own.
-  await installDebian('postgresql', async (asRoot) => {
+  await installDebian(major === null ? 'postgresql' : `postgresql-${major}`, async (asRoot) => {
     await asRoot('mkdir', ['-p', '/etc/postgresql-common/createcluster.d']);
     await asRoot('tee', ['/etc/postgresql-common/createcluster.d/wattcairn.conf'], 'create_main_cluster = false\n');
   });
-  const installed = findPostgres();
+  const installed = findPostgres(major);
   if (installed) return installed;
-  throw new StartError(
-    'Debian’s package postgresql was installed, but its programs were not found in /usr/lib/postgresql.',
-  );
+  throw new StartError('Debian’s package postgresql was installed, but its programs are not in /usr/lib/postgresql.');
 }
 
 /** Debian's Chromium, for the browser tests; installed where it is missing. */
@@ -69,12 +77,21 @@ async function installDebian(name, before = async () => {}) {
       `The package ${name} is missing. Install it (on Debian: sudo apt-get install ${name}), then start again.`,
     );
   }
+  // A kill must not stop a package manager half-way; the next start waits for its lock.
+  const options = { quiet: true, outlives: true };
   const asRoot = (command, args, input) =>
     root
-      ? run(command, args, { quiet: true, input, env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' } })
-      : run('sudo', ['-n', 'DEBIAN_FRONTEND=noninteractive', command, ...args], { quiet: true, input });
+      ? run(command, args, { ...options, input, env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' } })
+      : run('sudo', ['-n', 'DEBIAN_FRONTEND=noninteractive', command, ...args], { ...options, input });
+  const apt = (...args) => asRoot('apt-get', ['-q', '-o', 'DPkg::Lock::Timeout=300', ...args]);
   say(`Installing Debian’s package ${name} …`);
   await before(asRoot);
-  await asRoot('apt-get', ['update', '-q']);
-  await asRoot('apt-get', ['install', '-y', '-q', '--no-install-recommends', name]);
+  // Where an earlier installation was interrupted, apt-get refuses until this is done.
+  await asRoot('dpkg', ['--configure', '-a']);
+  await apt('update').catch((error) => {
+    throw new StartError(
+      `Debian’s package lists could not be fetched. Check the network, then start again.\n${error.message}`,
+    );
+  });
+  await apt('install', '-y', '--no-install-recommends', name);
 }

@@ -1,6 +1,7 @@
 import path from 'node:path';
-import { run, StartError } from './console.mjs';
+import { endOnSignals, explain, run, TYPESCRIPT } from './console.mjs';
 import { ensureDependencies } from './packages.mjs';
+import { runningStart } from './turn.mjs';
 
 /**
  * Runs one of our programs with the environment that `npm start` would give it: `node lib/ops/program.mjs seed.ts …`.
@@ -8,6 +9,7 @@ import { ensureDependencies } from './packages.mjs';
  */
 const root = path.resolve(import.meta.dirname, '../..');
 process.chdir(root);
+endOnSignals();
 const [file = '', ...args] = process.argv.slice(2);
 
 try {
@@ -15,15 +17,11 @@ try {
   const { prepareEnvironment } = await import('./settings.mjs');
   const { env, cluster } = await prepareEnvironment(root);
   try {
-    await run(
-      process.execPath,
-      ['--conditions=react-server', '--import', 'tsx', path.join(root, 'lib/ops', file), ...args],
-      { env },
-    );
+    await run(process.execPath, [...TYPESCRIPT, path.join(root, 'lib/ops', file), ...args], { env });
   } finally {
-    if (cluster && !cluster.adopted) await cluster.stop();
+    // A start that came meanwhile has adopted it.
+    if (cluster && !cluster.adopted && !runningStart(root)) await cluster.stop();
   }
 } catch (error) {
-  process.stderr.write(error instanceof StartError ? `${error.message}\n` : `${error.stack}\n`);
-  process.exitCode = 1;
+  explain(error);
 }

@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, renameSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { APPLICATION, freePort, OWNER, startCluster } from './cluster.mjs';
 import { StartError } from './console.mjs';
@@ -52,6 +52,9 @@ function withAuthAddress(env) {
 /** Made once: another secret would sign everybody out. */
 function keptSecret(root) {
   const file = path.join(root, '.data', 'secret');
-  if (!existsSync(file)) writeFileSync(file, randomBytes(48).toString('base64'), { mode: 0o600 });
+  if (!existsSync(file)) {
+    writeFileSync(`${file}.new`, randomBytes(48).toString('base64'), { mode: 0o600 });
+    renameSync(`${file}.new`, file);
+  }
   return readFileSync(file, 'utf8');
 }

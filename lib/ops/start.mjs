@@ -1,48 +1,73 @@
 import { spawn } from 'node:child_process';
 import path from 'node:path';
-import { ensureBuild } from './build.mjs';
-import { run, say, StartError } from './console.mjs';
-import { ensureDependencies } from './packages.mjs';
+import { fileURLToPath } from 'node:url';
+import { endOnSignals, explain, goOnUnlessInterrupted, run, say, StartError, TYPESCRIPT } from './console.mjs';
 
 /**
  * `npm start`: from a clean clone to a running site, each step only where it is needed. `--dev` serves from the
  * sources and rebuilds as they change.
  */
-const root = path.resolve(import.meta.dirname, '../..');
+const root = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '../..');
 const development = process.argv.includes('--dev');
 process.chdir(root);
-
-/** Runs one of our TypeScript programs. */
-const program = (file, args, env) =>
-  run(process.execPath, ['--conditions=react-server', '--import', 'tsx', path.join(root, 'lib/ops', file), ...args], {
-    env,
-  });
 
 async function start() {
   const [major = 0, minor = 0] = process.versions.node.split('.').map(Number);
   if (major < 20 || (major === 20 && minor < 12)) {
     throw new StartError(`This needs Node.js 20.12 or newer; this is ${process.versions.node}.`);
   }
-  await ensureDependencies(root);
-  const { prepareEnvironment } = await import('./settings.mjs');
-  const { env, cluster } = await prepareEnvironment(root);
+  endOnSignals();
+  // Loaded only now: an older Node.js doesn't know all that these use, and would not say what it lacks.
+  const { ensureDependencies } = await import('./packages.mjs');
+  const { claimPort, takeTurn } = await import('./turn.mjs');
+  const port = process.env.PORT ?? '3000';
+  const giveTurnBack = takeTurn(root, process.env.PUBLIC_ORIGIN ?? `http://127.0.0.1:${port}`);
   try {
-    say('Bringing the database up to date …');
-    await program('migrate.ts', [], env);
-    if (env.DEMO === '1') await program('seed.ts', ['--if-empty'], env);
-    if (!development) await ensureBuild(root, env);
-    const catcher = env.CAUGHT_MAIL_DIR ? child('mail-catcher.mjs', [], env) : null;
-    const server = child('serve.mjs', development ? ['--dev'] : [], {
-      ...env,
-      NODE_ENV: development ? 'development' : 'production',
-    });
-    server.once('message', () => announce(env));
-    await untilItEnds(server);
-    catcher?.kill();
+    await claimPort(port, process.env.HOST);
+    await ensureDependencies(root);
+    const { prepareEnvironment } = await import('./settings.mjs');
+    const { env, cluster } = await prepareEnvironment(root);
+    try {
+      await prepare(env);
+      await serve(env);
+    } finally {
+      // Also one that was adopted: it was left behind by a start that was killed.
+      await cluster?.stop();
+    }
   } finally {
-    // Also one that was adopted: it was left behind by a start that was killed.
-    await cluster?.stop();
+    giveTurnBack();
   }
+}
+
+async function prepare(env) {
+  const program = (file, ...args) =>
+    run(process.execPath, [...TYPESCRIPT, path.join(root, 'lib/ops', file), ...args], { env });
+  say('Bringing the database up to date …');
+  await program('migrate.ts');
+  if (env.DEMO === '1') await program('seed.ts', '--if-empty');
+  const { ensureBuild } = await import('./build.mjs');
+  if (!development) await ensureBuild(root, env);
+}
+
+async function serve(env) {
+  goOnUnlessInterrupted();
+  const { watchCallers } = await import('./turn.mjs');
+  const catcher = env.CAUGHT_MAIL_DIR ? child('mail-catcher.mjs', [], env) : null;
+  const server = child('serve.mjs', development ? ['--dev'] : [], {
+    ...env,
+    NODE_ENV: development ? 'development' : 'production',
+  });
+  let stopping = false;
+  const stop = () => {
+    stopping = true;
+    server.kill('SIGTERM');
+  };
+  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, stop);
+  watchCallers(stop);
+  server.once('message', () => announce(env));
+  const code = await new Promise((resolve) => server.on('exit', resolve));
+  catcher?.kill();
+  if (!stopping && code !== 0) throw new StartError(`The server ended with ${code}; what it printed above says why.`);
 }
 
 /** A child that ends with us, also when we are killed: it watches the channel between us. */
@@ -50,22 +75,6 @@ function child(file, args, env) {
   return spawn(process.execPath, [path.join(root, 'lib/ops', file), ...args], {
     env,
     stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
-  });
-}
-
-function untilItEnds(server) {
-  return new Promise((resolve, reject) => {
-    let stopping = false;
-    for (const signal of ['SIGINT', 'SIGTERM']) {
-      process.on(signal, () => {
-        stopping = true;
-        server.kill('SIGTERM');
-      });
-    }
-    server.on('exit', (code) => {
-      if (stopping || code === 0) resolve();
-      else reject(new StartError(`The server ended with ${code}; what it printed above says why.`));
-    });
   });
 }
 
@@ -83,7 +92,4 @@ function announce(env) {
   say('Ctrl-C ends it.\n');
 }
 
-start().catch((error) => {
-  process.stderr.write(error instanceof StartError ? `\n${error.message}\n` : `\n${error.stack}\n`);
-  process.exitCode = 1;
-});
+await start().catch(explain);
