@@ -10,6 +10,10 @@ const config = {
   poweredByHeader: false,
   reactStrictMode: true,
   agentRules: false,
+  // `npm test` checks all types; a start need not wait for them once more.
+  typescript: { ignoreBuildErrors: true },
+  // A page that the browser fetched ahead of a click is shown for half a minute at most: the least that Next allows.
+  experimental: { staleTimes: { dynamic: 0, static: 30 } },
   productionBrowserSourceMaps: false,
   images: { unoptimized: true },
   serverExternalPackages: ['sequelize', 'pg', 'jimp', 'multer', 'umzug', '@node-rs/argon2', 'pino'],

@@ -31,6 +31,7 @@ export async function ensureBuild(root, env) {
   await run(process.execPath, [path.join(root, 'node_modules', 'next', 'dist', 'bin', 'next'), 'build'], {
     cwd: root,
     env: { ...env, NODE_ENV: 'production' },
+    quiet: true,
   });
   writeFileSync(mark, now);
 }

@@ -10,7 +10,7 @@ export const APPLICATION = 'wattcairn_app';
 const SUPERUSER = 'wattcairn_admin';
 const DATABASE = 'wattcairn';
 /** Older than this, a start warns: releases before lack fixes of known holes. */
-const FLOORS = { 14: 24, 15: 19, 16: 15, 17: 11, 18: 6 };
+const FLOORS = JSON.parse(readFileSync(path.join(import.meta.dirname, 'version-floors.json'), 'utf8')).postgresql;
 
 /**
  * @typedef {object} Cluster

@@ -26,6 +26,10 @@ export const store = (globalThis[key] ??= {
 export default class MemoryCache {
   began = store.drops;
 
+  /**
+   * @param {string} name
+   * @param {{ tags?: string[], softTags?: string[] }} how
+   */
   async get(name, { tags = [], softTags = [] } = {}) {
     const entry = store.entries.get(name);
     if (!entry) return null;
@@ -35,6 +39,11 @@ export default class MemoryCache {
     return { value: entry.value, cacheControl: entry.cacheControl, lastModified: entry.lastModified };
   }
 
+  /**
+   * @param {string} name
+   * @param {Record<string, any> | null} value a page, an answer of a route, or data.
+   * @param {{ fetchCache?: boolean, tags?: string[], cacheControl?: object }} how
+   */
   async set(name, value, { fetchCache = false, tags = [], cacheControl } = {}) {
     remove(name);
     if (!fetchCache) for (const reader of store.readers) reader.outdated ||= this.began < reader.arrived;
@@ -52,6 +61,7 @@ export default class MemoryCache {
     }
   }
 
+  /** @param {string | string[]} tagOrTags */
   async revalidateTag(tagOrTags) {
     const dropped = new Set([tagOrTags].flat());
     store.drops += 1;
