@@ -43,3 +43,12 @@ export const loadDevicesOfCategory = cache((categoryId: number): Promise<Device[
   });
   return load(categoryId);
 });
+
+/** A category by its id, which a device's page knows. */
+export const loadCategoryById = cache((categoryId: number): Promise<Category | null> => {
+  const load = unstable_cache(categoryById, ['category', String(categoryId)], {
+    tags: [`category:${categoryId}`],
+    revalidate: false,
+  });
+  return load(categoryId);
+});

@@ -2,7 +2,7 @@ import 'server-only';
 import { unstable_cache } from 'next/cache';
 import { cache } from 'react';
 import { AppError } from '@/lib/platform/errors';
-import { reportByPublicId, reportsOfDevice } from './queries/reports';
+import { ambientOfDevice, reportByPublicId, reportsOfDevice } from './queries/reports';
 import type { ReportListItem, ReportView } from './schema';
 
 /** A published report, or why there is none to read. */
@@ -26,6 +26,14 @@ export const loadPublishedReport = cache((publicId: string): Promise<LoadedRepor
 
 export const loadReportsOfDevice = cache((deviceId: number): Promise<ReportListItem[]> => {
   const load = unstable_cache(reportsOfDevice, ['reports-of-device', String(deviceId)], {
+    tags: [`device:${deviceId}`],
+    revalidate: false,
+  });
+  return load(deviceId);
+});
+
+export const loadAmbientOfDevice = cache((deviceId: number): Promise<number | null> => {
+  const load = unstable_cache(ambientOfDevice, ['ambient-of-device', String(deviceId)], {
     tags: [`device:${deviceId}`],
     revalidate: false,
   });

@@ -4,7 +4,7 @@ import type { Actor } from '@/lib/auth/schema';
 import { database } from '@/lib/platform/database/connection';
 import { AppError, notFound } from '@/lib/platform/errors';
 import { maySeeReport } from '../policy';
-import type { ReportView, ReportState, ReportListItem } from '../schema';
+import type { ReportListItem, ReportView } from '../schema';
 
 interface ReportRow extends Omit<ReportView, 'figures' | 'phases' | 'traces' | 'photos' | 'reviews'> {
   revisionId: number;
@@ -167,7 +167,13 @@ export function reportsOfMember(memberId: number): Promise<ReportListItem[]> {
   );
 }
 
-export async function stateOf(publicId: string): Promise<ReportState | null> {
-  const row = await database().models.Report.findOne({ where: { publicId }, attributes: ['state'] });
-  return row?.state ?? null;
+/** The middle of the rooms in which a device's verified reports were measured, or null where none says. */
+export async function ambientOfDevice(deviceId: number): Promise<number | null> {
+  const [row] = await database().sequelize.query<{ middle: number | null }>(
+    `select percentile_cont(0.5) within group (order by v.ambient_celsius) as middle
+     from report r join report_revision v on v.id = r.published_revision_id
+     where r.device_id = $1 and r.state not in ('withdrawn', 'lapsed')`,
+    { bind: [deviceId], type: QueryTypes.SELECT },
+  );
+  return row?.middle ?? null;
 }
