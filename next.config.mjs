@@ -17,6 +17,12 @@ const config = {
   productionBrowserSourceMaps: false,
   images: { unoptimized: true },
   serverExternalPackages: ['sequelize', 'pg', 'jimp', 'multer', 'umzug', '@node-rs/argon2', 'pino'],
+  // Static by request, not at build time: see app/(reader)/front.
+  rewrites: async () => [
+    { source: '/', destination: '/front/home' },
+    { source: '/devices', destination: '/front/devices' },
+    { source: '/categories', destination: '/front/categories' },
+  ],
   outputFileTracingRoot: import.meta.dirname,
   turbopack: { root: import.meta.dirname },
 };

@@ -80,7 +80,7 @@ export const PLANNED_REPORTS: readonly PlannedReport[] = [
   plan('kx140', 'teague', '2026-10-03', freezer(82.6, 0.0108, 20.4)),
   plan('kx140', 'wilma', '2026-10-09', freezer(76.3, 0.0101, 21.0)),
   plan('kx140', 'jorun', '2026-10-18', freezer(78.8, 0.0106, 19.9)),
-  plan('kx140', 'eskil', '2026-10-25', freezer(86.4, 0.0182, 20.2), {
+  plan('kx140', 'eskil', '2026-10-25', freezer(86.4, 0.0152, 20.2), {
     notes: 'An old one: the seal of the lid is torn at the back, and ice grows there.',
   }),
   plan('kx140', 'tilda', '2026-11-20', freezer(77.9, 0.0104, 19.6), { outcome: 'submitted', withPhoto: true }),

@@ -2,8 +2,7 @@ import type { ReactNode } from 'react';
 import { DotPlot } from '@/components/charts/dot-plot';
 import { Figure as Number } from '@/components/ui/figure';
 import type { Figure } from '@/lib/figures/schema';
-import { formatRange } from '@/lib/measurement/units/format-figure';
-import { figureName, medianOf, plainUnit, voicesOf } from './figure-words';
+import { countWords, figureName, medianOf, plainUnit, rangeOf } from './figure-words';
 
 export interface PlottedClaim {
   lower: number | null;
@@ -11,15 +10,19 @@ export interface PlottedClaim {
   label: string;
 }
 
+const CONTRIBUTOR = { one: 'contributor', many: 'contributors' };
+
 interface FigureRowProps {
   figure: Figure;
   note?: ReactNode;
   claim?: PlottedClaim;
   scale?: readonly [number, number];
+  /** What one stone is; a contributor by default. */
+  noun?: { one: string; many: string };
 }
 
 /** One figure of a sheet: what it is, its median, range and contributors, and its pile. */
-export function FigureRow({ figure, note, claim, scale }: FigureRowProps) {
+export function FigureRow({ figure, note, claim, scale, noun = CONTRIBUTOR }: FigureRowProps) {
   const median = medianOf(figure);
   const name = figureName(figure);
   const more = [
@@ -43,11 +46,11 @@ export function FigureRow({ figure, note, claim, scale }: FigureRowProps) {
       <dl className="col-span-2 flex flex-wrap gap-x-5 text-caption sm:col-span-1 sm:block">
         <div className="max-sm:flex max-sm:gap-2">
           <dt className="text-muted">range</dt>
-          <dd className="font-mono text-cell">{formatRange(figure.minimum, figure.maximum, plainUnit(figure.unit))}</dd>
+          <dd className="font-mono text-cell">{rangeOf(figure)}</dd>
         </div>
         <div className="max-sm:flex max-sm:gap-2">
-          <dt className="text-muted">contributors</dt>
-          <dd className="font-mono text-cell">{figure.n === 1 ? '1, one unit' : figure.n}</dd>
+          <dt className="text-muted">{noun.many}</dt>
+          <dd className="font-mono text-cell">{figure.n}</dd>
         </div>
         {more && (
           <div>
@@ -58,7 +61,7 @@ export function FigureRow({ figure, note, claim, scale }: FigureRowProps) {
       </dl>
       <div className="col-span-2 min-w-0 sm:col-span-3 xl:col-span-1">
         <DotPlot
-          title={`${name}: ${voicesOf(figure)}`}
+          title={`${name}: ${countWords(figure.n, noun.one, noun.many)}`}
           size="page"
           scale={scale}
           stones={figure.stones}
@@ -67,6 +70,7 @@ export function FigureRow({ figure, note, claim, scale }: FigureRowProps) {
           q3={figure.upperQuartile ?? undefined}
           claim={claim}
           unit={plainUnit(figure.unit)}
+          noun={noun}
         />
       </div>
     </div>

@@ -1,5 +1,5 @@
 import type { Figure, FigureSummary } from '@/lib/figures/schema';
-import { formatFigure } from '@/lib/measurement/units/format-figure';
+import { formatFigure, formatRange } from '@/lib/measurement/units/format-figure';
 
 const SMALL = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
 
@@ -45,4 +45,17 @@ export function plainUnit(unit: string): string {
 /** Who stands behind it: one unit, or so many contributors. */
 export function voicesOf(figure: Pick<FigureSummary, 'n'>): string {
   return figure.n === 1 ? 'one unit' : countWords(figure.n, 'contributor');
+}
+
+/** The range beside a median, in the median's unit. */
+export function rangeOf(figure: FigureSummary): string {
+  return formatRange(figure.minimum, figure.maximum, plainUnit(figure.unit), figure.median);
+}
+
+const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
+
+/** A day as it is written on a sheet: "3 Sep 2026". */
+export function dayWords(isoDate: string): string {
+  const [year, month, day] = isoDate.slice(0, 10).split('-').map(Number);
+  return `${day} ${MONTHS[(month ?? 1) - 1]} ${year}`;
 }

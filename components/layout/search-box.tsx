@@ -9,7 +9,13 @@ interface SearchBoxProps {
 /** A plain form: it works before and without any script. */
 export function SearchBox({ query, size = 'header' }: SearchBoxProps) {
   return (
-    <form action="/search" method="get" role="search" className="relative">
+    <form
+      action="/search"
+      method="get"
+      role="search"
+      aria-label={size === 'page' ? 'Search the whole site' : 'Search'}
+      className="relative"
+    >
       <input
         type="search"
         name="q"

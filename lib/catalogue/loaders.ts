@@ -1,6 +1,7 @@
 import 'server-only';
 import { unstable_cache } from 'next/cache';
 import { cache } from 'react';
+import { rank, type SearchEntry } from '@/lib/platform/search/rank';
 import { categoryById, deviceById, devicesOfCategory, listCategories, listDevices, resolveSlug } from './queries';
 import type { Category, Device } from './schema';
 
@@ -52,3 +53,27 @@ export const loadCategoryById = cache((categoryId: number): Promise<Category | n
   });
   return load(categoryId);
 });
+
+let searched: { devices: readonly Device[]; entries: SearchEntry[] } | null = null;
+
+/** The devices that a query most likely means, the best first; those of one category stay in that order too. */
+export async function findDevices(query: string, most: number): Promise<Device[]> {
+  const devices = await loadDevices();
+  // The index is made anew only when the catalogue has changed: the cached list is read afresh at each request.
+  if (searched === null || !sameDevices(searched.devices, devices)) {
+    const entries = devices.map(({ publicId, name, aliases, category }) => ({
+      id: publicId,
+      name,
+      words: [...aliases, category.name],
+    }));
+    searched = { devices, entries };
+  }
+  const byId = new Map(devices.map((device) => [device.publicId, device]));
+  return rank(searched.entries, query, most).flatMap(({ id }) => byId.get(id) ?? []);
+}
+
+function sameDevices(a: readonly Device[], b: readonly Device[]): boolean {
+  const said = ({ publicId, name, aliases, category }: Device) =>
+    `${publicId} ${name} ${aliases.join()} ${category.name}`;
+  return a.length === b.length && a.every((device, i) => b[i] !== undefined && said(device) === said(b[i]));
+}

@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import { Badge } from '@/components/ui/badge';
 import { RowMore, Table, Td, Th, Tr } from '@/components/ui/table';
-import { plainUnit } from '@/components/figures/figure-words';
+import { dayWords, plainUnit } from '@/components/figures/figure-words';
 import { formatDuration, formatFigure } from '@/lib/measurement/units/format-figure';
 import { INSTRUMENT_KINDS, type ReportListItem } from '@/lib/reports/schema';
 
@@ -40,6 +40,7 @@ export function ReportTable({ reports, unit, quantityWords }: ReportTableProps) 
 
 function Row({ report, unit }: { report: ReportListItem; unit: string }) {
   const instrument = `${INSTRUMENT_KINDS[report.instrumentKind]} ±${report.percentOfReading} %`;
+  const measured = report.measuredOn === null ? '' : dayWords(report.measuredOn);
   const duration = formatDuration(report.durationSeconds);
   const figure =
     report.value === null
@@ -59,7 +60,7 @@ function Row({ report, unit }: { report: ReportListItem; unit: string }) {
           </Link>
         </Td>
         <Td wide className="whitespace-nowrap">
-          {report.measuredOn}
+          {measured}
         </Td>
         <Td wide>{instrument}</Td>
         <Td numeric wide className="whitespace-nowrap">
@@ -78,7 +79,7 @@ function Row({ report, unit }: { report: ReportListItem; unit: string }) {
         columns={3}
         of={report.member}
         facts={[
-          { label: 'measured', value: report.measuredOn },
+          { label: 'measured', value: measured },
           { label: 'instrument', value: instrument },
           { label: 'duration', value: duration },
         ]}

@@ -68,12 +68,13 @@ export function formatFigure(figure: {
 }
 
 /**
- * A range with its unit once, an en dash between, both ends in the unit of the larger and to the same place.
+ * A range with its unit once, an en dash between, both ends in one unit and to the same place.
  *
+ * @param beside the value whose unit the range takes, so that a sheet doesn't mix Wh and kWh; the larger end by default.
  * @example formatRange(710, 968, 'Wh') // '710–968 Wh'
  */
-export function formatRange(low: number, high: number, unit: string): string {
-  const readable = readableUnit(unit, Math.max(Math.abs(low), Math.abs(high)));
+export function formatRange(low: number, high: number, unit: string, beside = high): string {
+  const readable = readableUnit(unit, Math.abs(beside));
   const [from, to] = [low / readable.factor, high / readable.factor];
   const spread = to - from;
   const decimals = Math.max(significantDecimals(to, 2), spread > 0 ? significantDecimals(spread, 2) : 0);

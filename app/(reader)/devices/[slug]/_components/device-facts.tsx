@@ -1,11 +1,19 @@
 import Link from 'next/link';
 import { Fact, Margin } from '@/components/layout/margin';
 import { claimWords } from '@/components/claims/claim-words';
-import { countWords, figureName, medianOf, plainUnit, voicesOf } from '@/components/figures/figure-words';
+import {
+  countWords,
+  dayWords,
+  figureName,
+  medianOf,
+  plainUnit,
+  rangeOf,
+  voicesOf,
+} from '@/components/figures/figure-words';
 import type { Category } from '@/lib/catalogue/schema';
 import type { ClaimBeside } from '@/lib/claims/rules';
 import type { Figure } from '@/lib/figures/schema';
-import { formatFigure, formatRange } from '@/lib/measurement/units/format-figure';
+import { formatFigure } from '@/lib/measurement/units/format-figure';
 
 interface DeviceFactsProps {
   devicePublicId: string;
@@ -31,12 +39,12 @@ export function DeviceFacts({ devicePublicId, category, figures, besides }: Devi
       {headline && (
         <Fact label={figureName(headline)} figure={`${medianOf(headline).value} ${plainUnit(medianOf(headline).unit)}`}>
           median of {voicesOf(headline)}
-          {headline.n > 1 && `, range ${formatRange(headline.minimum, headline.maximum, plainUnit(headline.unit))}`}
+          {headline.n > 1 && `, range ${rangeOf(headline)}`}
         </Fact>
       )}
       {claim && (
         <Fact label="The maker says" figure={claimWords(claim.claim)} tone="slate">
-          “{claim.claim.term}”, read {claim.claim.source.readOn}
+          “{claim.claim.term}”, read {dayWords(claim.claim.source.readOn)}
         </Fact>
       )}
       <NightFact category={category} figures={figures} />

@@ -1,7 +1,6 @@
-import { countWords, medianOf, plainUnit } from '@/components/figures/figure-words';
+import { countWords, medianOf, plainUnit, rangeOf } from '@/components/figures/figure-words';
 import type { Category } from '@/lib/catalogue/schema';
 import type { Figure } from '@/lib/figures/schema';
-import { formatRange } from '@/lib/measurement/units/format-figure';
 
 const OPENINGS: Partial<Record<Figure['quantity'], string>> = {
   'day-energy': 'Over a day it takes',
@@ -26,7 +25,7 @@ export function DeviceLead({ category, figures }: { category: Category; figures:
       </strong>
       {headline.n === 1
         ? ', measured on one unit.'
-        : `: ${countWords(headline.n, 'contributor')} found ${formatRange(headline.minimum, headline.maximum, plainUnit(headline.unit))}.`}
+        : `: ${countWords(headline.n, 'contributor')} found ${rangeOf(headline)}.`}
       {running && headline.quantity === 'day-energy' && (
         <> While the compressor runs it draws {medianOf(running).value} W.</>
       )}

@@ -8,6 +8,8 @@ const DAYS_A_YEAR = 365;
 
 interface HomeEnergy {
   wattHoursADay: number;
+  /** Known where the day itself was measured. */
+  standardUncertainty: number | null;
   how: string;
 }
 
@@ -17,10 +19,20 @@ function dayEnergy(category: Category, figures: Figure[]): HomeEnergy | null {
   const { hoursByMode, usesPerDay } = category.usePattern;
   const use = main.find((figure) => figure.quantity === 'use-energy');
   if (use && usesPerDay !== null) {
-    return { wattHoursADay: use.median * usesPerDay, how: `${usesPerDay} uses a day, what stands by left out` };
+    return {
+      wattHoursADay: use.median * usesPerDay,
+      standardUncertainty: use.standardUncertainty === null ? null : use.standardUncertainty * usesPerDay,
+      how: `With ${usesPerDay} uses a day; what it takes in between is left out.`,
+    };
   }
   const day = main.find((figure) => figure.quantity === 'day-energy');
-  if (day && category.duty === 'cyclic') return { wattHoursADay: day.median, how: 'measured over whole days' };
+  if (day && category.duty === 'cyclic') {
+    return {
+      wattHoursADay: day.median,
+      standardUncertainty: day.standardUncertainty,
+      how: 'As measured, over whole days.',
+    };
+  }
   const parts = Object.entries(hoursByMode).map(([code, hours]) => {
     const power = main.find((figure) => figure.quantity === 'mean-power' && figure.mode?.code === code);
     return power ? { wattHours: power.median * hours, words: `${hours} h ${power.mode?.name.toLowerCase()}` } : null;
@@ -29,7 +41,8 @@ function dayEnergy(category: Category, figures: Figure[]): HomeEnergy | null {
   const known = parts.filter((part) => part !== null);
   return {
     wattHoursADay: known.reduce((sum, part) => sum + part.wattHours, 0),
-    how: `a day of ${known.map((part) => part.words).join(' and ')}`,
+    standardUncertainty: null,
+    how: `For a day of ${known.map((part) => part.words).join(' and ')}.`,
   };
 }
 
@@ -37,15 +50,23 @@ function dayEnergy(category: Category, figures: Figure[]): HomeEnergy | null {
 export function InYourHome({ category, figures }: { category: Category; figures: Figure[] }) {
   const energy = dayEnergy(category, figures);
   if (!energy) return null;
-  const day = formatFigure({ value: energy.wattHoursADay, unit: 'Wh' });
-  const year = formatFigure({ value: energy.wattHoursADay * DAYS_A_YEAR, unit: 'Wh' });
+  const over = (days: number, unit: string) => {
+    const u = energy.standardUncertainty;
+    const figure = formatFigure({
+      value: energy.wattHoursADay * days,
+      standardUncertainty: u === null ? null : u * days,
+      unit: 'Wh',
+    });
+    const note = figure.uncertainty === null ? undefined : `± ${figure.uncertainty}`;
+    return <Number size="row" value={figure.value} unit={`${figure.unit} ${unit}`} note={note} />;
+  };
   return (
     <Section title="In your home">
       <p className="mt-4 flex flex-wrap gap-x-8 gap-y-2">
-        <Number size="row" value={day.value} unit={`${day.unit} a day`} />
-        <Number size="row" value={year.value} unit={`${year.unit} a year`} />
+        {over(1, 'a day')}
+        {over(DAYS_A_YEAR, 'a year')}
       </p>
-      <p className="mt-2 text-note text-muted">For {energy.how}..</p>
+      <p className="mt-2 text-note text-muted">{energy.how}</p>
     </Section>
   );
 }

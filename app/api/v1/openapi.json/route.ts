@@ -1,0 +1,3 @@
+import { getOpenApiRoute } from '@/lib/open-data/handlers';
+
+export const GET = getOpenApiRoute.handler;

@@ -1,0 +1,3 @@
+import { getQueueRoute } from '@/lib/review/handlers';
+
+export const GET = getQueueRoute.handler;

@@ -1,0 +1,3 @@
+import { getDeskRoute } from '@/lib/review/handlers';
+
+export const GET = getDeskRoute.handler;

@@ -1,0 +1,3 @@
+import { decideRoute } from '@/lib/review/handlers';
+
+export const POST = decideRoute.handler;
