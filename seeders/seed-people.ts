@@ -4,7 +4,7 @@ import type { Work } from '@/lib/platform/database/transaction';
 import { publicId } from '@/lib/platform/ids';
 import { addInstrument } from '@/lib/reports/commands/instruments';
 import type { InstrumentInput } from '@/lib/reports/schema';
-import { DEMONSTRATION_ACCOUNTS } from './accounts';
+import { DEMONSTRATION_ACCOUNTS } from '@/lib/platform/demonstration-accounts';
 
 /** A member of the demonstration, with the instrument they measure with. */
 export interface SeededMember {

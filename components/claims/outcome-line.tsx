@@ -11,7 +11,7 @@ export function OutcomeLine({ beside }: { beside: ClaimBeside<ClaimedFigure> }) 
         <path d="M1.5 11V2.5h19V11" className="fill-none stroke-slate" strokeWidth="2" />
       </svg>
       <span>
-        <span className="font-semibold first-letter:uppercase">{words}</span>
+        <span className="block font-semibold first-letter:uppercase">{words}</span>
         <span className="block text-muted">{sentence}</span>
       </span>
     </p>

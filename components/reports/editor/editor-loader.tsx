@@ -10,7 +10,7 @@ import { Skeleton } from '@/components/ui/skeleton';
 import { callApi } from '@/lib/platform/http/call-api';
 import { emptyValues, type EditorValues } from './editor-values';
 import { ReportEditor } from './report-editor';
-import { keptHere } from './use-draft';
+import { keptHere } from './draft-saver';
 import { useEditorData } from './use-editor-data';
 
 const draft = z.object({ publicId: z.string(), version: z.int(), content: z.record(z.string(), z.unknown()) });

@@ -1,7 +1,7 @@
 'use client';
 
 import { useQuery } from '@tanstack/react-query';
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { z } from 'zod';
 import { Notice } from '@/components/layout/notices';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
@@ -54,7 +54,7 @@ function readyPhases(values: EditorValues): Phase[] {
 /** Figures with their uncertainty as readings come in, so that the member sees what the instrument can tell. */
 export function FigurePreview({ category }: { category: EditorCategory }) {
   const form = useFormContext<EditorValues>();
-  const values = form.watch();
+  const values = useWatch({ control: form.control }) as EditorValues;
   const phases = readyPhases(values);
   const body = {
     categoryPublicId: category.publicId,

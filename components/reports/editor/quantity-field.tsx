@@ -20,8 +20,10 @@ interface QuantityFieldProps {
 /** A number with its unit, as people type it; where something else was probably meant it says so and offers it. */
 export function QuantityField({ name, label, unit, unitWords, hint, optional, error }: QuantityFieldProps) {
   const { control } = useFormContext<EditorValues>();
-  const { field } = useController({ control, name: name as 'ambient' });
-  const reading = readQuantity(field.value, unit);
+  const {
+    field: { value, onChange, onBlur, ref },
+  } = useController({ control, name: name as 'ambient' });
+  const reading = readQuantity(value, unit);
   return (
     <div>
       <NumberField
@@ -31,10 +33,10 @@ export function QuantityField({ name, label, unit, unitWords, hint, optional, er
         optional={optional}
         error={error}
         name={name}
-        value={field.value}
-        onChange={field.onChange}
-        onBlur={field.onBlur}
-        ref={field.ref}
+        value={value}
+        onChange={onChange}
+        onBlur={onBlur}
+        ref={ref}
       />
       {reading.status === 'ask' && (
         <div role="status" className="-mt-3 mb-4 max-w-prose border-l-3 border-muted pl-4 text-note">
@@ -47,7 +49,7 @@ export function QuantityField({ name, label, unit, unitWords, hint, optional, er
                   key={meant.label}
                   type="button"
                   className="min-h-8 text-lichen underline underline-offset-4 pointer-coarse:min-h-11"
-                  onClick={() => field.onChange(String(meant.value))}
+                  onClick={() => onChange(String(meant.value))}
                 >
                   I meant {meant.label}
                 </button>

@@ -2,7 +2,7 @@
 
 import { useRouter } from 'next/navigation';
 import { useEffect, useState } from 'react';
-import { FormProvider, useForm } from 'react-hook-form';
+import { FormProvider, useForm, useWatch } from 'react-hook-form';
 import { z } from 'zod';
 import { Button } from '@/components/ui/button';
 import { ErrorSummary } from '@/components/ui/error-summary';
@@ -42,23 +42,21 @@ interface ReportEditorProps {
 export function ReportEditor({ data, initial, amendsPublicId }: ReportEditorProps) {
   const router = useRouter();
   const form = useForm<EditorValues>({ defaultValues: initial.values });
-  const draft = useDraft(initial);
+  const { state, saver } = useDraft(initial);
   const [step, setStep] = useState<StepKey>('device');
   const [problems, setProblems] = useState<EditorProblem[]>([]);
   const [attempt, setAttempt] = useState(0);
   const [sending, setSending] = useState(false);
-  const { save } = draft;
-  useEffect(() => {
-    // The library's own way to hear of changes without rendering at each key.
-    const { unsubscribe } = form.watch(() => save(form.getValues()));
-    return unsubscribe;
-  }, [form, save]);
+  useEffect(
+    () =>
+      form.subscribe({ formState: { values: true }, callback: ({ values }) => saver.save(structuredClone(values)) }),
+    [form, saver],
+  );
 
-  const [devicePublicId, categoryPublicId, proposesDevice] = form.watch([
-    'devicePublicId',
-    'categoryPublicId',
-    'proposesDevice',
-  ]);
+  const [devicePublicId, categoryPublicId, proposesDevice] = useWatch({
+    control: form.control,
+    name: ['devicePublicId', 'categoryPublicId', 'proposesDevice'],
+  });
   const device = data.devices.find((known) => known.publicId === devicePublicId);
   const category = data.categories.find((known) =>
     proposesDevice ? known.publicId === categoryPublicId : known.slug === device?.category.slug,
@@ -81,13 +79,13 @@ export function ReportEditor({ data, initial, amendsPublicId }: ReportEditorProp
         method: 'POST',
         body: {
           clientKey: values.clientKey,
-          draftPublicId: draft.draftPublicId(),
+          draftPublicId: saver.publicId,
           amendsPublicId,
           submission: read.submission,
         },
         answer: z.object({ publicId: z.string() }),
       });
-      draft.forget();
+      saver.forget();
       router.push(`/reports/${publicId}/mine`);
     } catch (error) {
       setSending(false);
@@ -104,11 +102,11 @@ export function ReportEditor({ data, initial, amendsPublicId }: ReportEditorProp
     <FormProvider {...form}>
       <ErrorSummary errors={problems} attempt={attempt} />
       <SaveNote
-        state={draft.state}
+        state={state}
         mine={() => form.getValues()}
         onSettle={(version, values) => {
           form.reset(values);
-          draft.settle(version, values);
+          saver.settle(version, values);
         }}
       />
       <div className="lg:grid lg:grid-cols-[12rem_minmax(0,1fr)] lg:gap-10">

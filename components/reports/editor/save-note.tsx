@@ -3,7 +3,7 @@
 import { Notice } from '@/components/layout/notices';
 import { Button } from '@/components/ui/button';
 import type { EditorValues } from './editor-values';
-import type { SaveState } from './use-draft';
+import type { SaveState } from './draft-saver';
 
 interface SaveNoteProps {
   state: SaveState;

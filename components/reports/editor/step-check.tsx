@@ -1,6 +1,6 @@
 'use client';
 
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { Notice } from '@/components/layout/notices';
 import { Checkbox } from '@/components/ui/choices';
 import { formatDuration } from '@/lib/measurement/units/format-figure';
@@ -13,7 +13,7 @@ import type { StepProps } from './step-props';
 /** Everything as the moderator will see it, and what the method still wants. */
 export function StepCheck({ data, category, errorOf }: StepProps) {
   const form = useFormContext<EditorValues>();
-  const values = form.watch();
+  const values = useWatch({ control: form.control }) as EditorValues;
   const method = data.methods.find((known) => known.code === values.methodCode);
   const instrument = data.instruments.find((known) => known.publicId === values.instrumentPublicId);
   const longest = Math.max(

@@ -1,6 +1,6 @@
 'use client';
 
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { Caution } from '@/components/ui/caution';
 import { Checkbox, RadioGroup } from '@/components/ui/choices';
 import { Select, Textarea, TextInput } from '@/components/ui/inputs';
@@ -12,7 +12,7 @@ import type { StepProps } from './step-props';
 
 export function StepConditions({ data, category, errorOf }: StepProps) {
   const form = useFormContext<EditorValues>();
-  const values = form.watch();
+  const values = useWatch({ control: form.control }) as EditorValues;
   const method = data.methods.find((known) => known.code === values.methodCode);
   return (
     <>

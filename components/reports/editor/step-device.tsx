@@ -1,7 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { Notice } from '@/components/layout/notices';
 import { Button } from '@/components/ui/button';
 import { Select, TextInput } from '@/components/ui/inputs';
@@ -27,7 +27,7 @@ function findDevices(devices: EditorDevice[], text: string): EditorDevice[] {
 export function StepDevice({ data, errorOf }: StepProps) {
   const form = useFormContext<EditorValues>();
   const [text, setText] = useState('');
-  const values = form.watch();
+  const values = useWatch({ control: form.control }) as EditorValues;
   const chosen = data.devices.find((device) => device.publicId === values.devicePublicId);
   const choose = (device: EditorDevice) => {
     form.setValue('devicePublicId', device.publicId);

@@ -1,7 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { Caution } from '@/components/ui/caution';
 import { Button } from '@/components/ui/button';
 import { RadioGroup } from '@/components/ui/choices';
@@ -34,7 +34,7 @@ export function accuracyWords(instrument: Pick<Instrument, 'percentOfReading' | 
 
 export function StepInstrument({ data, errorOf }: StepProps) {
   const form = useFormContext<EditorValues>();
-  const chosen = form.watch('instrumentPublicId');
+  const chosen = useWatch({ control: form.control, name: 'instrumentPublicId' });
   const instrument = data.instruments.find((known) => known.publicId === chosen);
   const [adding, setAdding] = useState(data.instruments.length === 0);
   const caution = instrument && CAUTIONS[instrument.kind];

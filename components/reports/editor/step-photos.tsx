@@ -1,7 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { z } from 'zod';
 import { Button } from '@/components/ui/button';
 import { FileDrop } from '@/components/ui/file-drop';
@@ -18,7 +18,7 @@ const accepted = z.object({ publicId: z.string(), removedMetadata: z.array(z.str
 
 export function StepPhotos({ errorOf }: StepProps) {
   const form = useFormContext<EditorValues>();
-  const photos = form.watch('photos');
+  const photos = useWatch({ control: form.control, name: 'photos' });
   const [sending, setSending] = useState<{ name: string; share: number; done: number; of: number } | null>(null);
   const [problems, setProblems] = useState<string[]>([]);
 

@@ -1,7 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { useFormContext } from 'react-hook-form';
+import { useFormContext, useWatch } from 'react-hook-form';
 import { Notice } from '@/components/layout/notices';
 import { Button } from '@/components/ui/button';
 import { FieldError } from '@/components/ui/field';
@@ -32,7 +32,7 @@ function likelyMode(category: EditorCategory | undefined): string {
 
 export function StepReadings({ category, errorOf }: StepProps) {
   const form = useFormContext<EditorValues>();
-  const { traces, typed } = form.watch();
+  const { traces, typed } = useWatch({ control: form.control }) as EditorValues;
   const [open, setOpen] = useState<OpenFile | null>(null);
   const phasesError = errorOf('phases');
 

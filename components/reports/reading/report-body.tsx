@@ -1,22 +1,10 @@
-import ReactMarkdown from 'react-markdown';
-import rehypeSanitize from 'rehype-sanitize';
-import remarkGfm from 'remark-gfm';
+import { Markdown } from '@/components/articles/markdown';
 import { countWords, dayWords } from '@/components/figures/figure-words';
 import { Section } from '@/components/layout/headings';
 import { MEASURING_POINTS, PHOTO_KINDS, SUPPLY_CLASSES, type ReportView } from '@/lib/reports/schema';
 import { ReportFigures } from './report-figures';
 import { ReportReviews } from './report-reviews';
 import { ReportTrace } from './report-trace';
-
-/** Links of members' text vouch for nothing, and pictures of other sites are not loaded. */
-const MARKDOWN = {
-  a: ({ href, children }: { href?: string; children?: React.ReactNode }) => (
-    <a href={href} rel="nofollow ugc noopener" className="text-lichen underline underline-offset-4">
-      {children}
-    </a>
-  ),
-  img: ({ alt }: { alt?: string }) => <span>{alt}</span>,
-};
 
 /** A report in full: figures, trace, photos, conditions, review record. */
 export function ReportBody({ report }: { report: ReportView }) {
@@ -83,10 +71,8 @@ export function ReportBody({ report }: { report: ReportView }) {
       </Section>
       {content.notes !== '' && (
         <Section title="Notes">
-          <div className="mt-3 max-w-prose space-y-3 wrap-anywhere [&_ul]:list-disc [&_ul]:pl-5">
-            <ReactMarkdown remarkPlugins={[remarkGfm]} rehypePlugins={[rehypeSanitize]} components={MARKDOWN}>
-              {content.notes}
-            </ReactMarkdown>
+          <div className="mt-3">
+            <Markdown>{content.notes}</Markdown>
           </div>
         </Section>
       )}

@@ -23,11 +23,21 @@ export async function readJson(request: Request): Promise<unknown> {
       content += text.decode(chunk as Uint8Array, { stream: true });
     }
     content += text.decode();
-    return JSON.parse(content) as unknown;
+    return JSON.parse(content, refuseUnkeepable) as unknown;
   } catch (error) {
     if (error instanceof AppError) throw error;
     throw new AppError('bad-request', 'The body is no JSON that can be read. Check it and send it again.');
   }
+}
+
+const UNKEEPABLE = /\u0000|\p{Surrogate}/u;
+
+/** The database keeps no NUL and no half of a surrogate pair; met there, they would look like a fault of ours. */
+function refuseUnkeepable(key: string, value: unknown): unknown {
+  if (UNKEEPABLE.test(key) || (typeof value === 'string' && UNKEEPABLE.test(value))) {
+    throw new AppError('bad-request', 'A text holds a character that no keyboard makes. Type that text anew.');
+  }
+  return value;
 }
 
 /** Query parameters as an object; one that comes twice is an array, which a schema for a single value refuses. */

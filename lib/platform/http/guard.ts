@@ -21,3 +21,10 @@ export function refuseForeignWrites(request: Request): void {
 export function clientAddress(request: Request): string {
   return request.headers.get('x-wattcairn-address') ?? 'unknown';
 }
+
+/** An address with a NUL in it names nothing, and the database would fail over it. */
+export function refuseOddAddress(url: URL): void {
+  if (/%00/.test(url.pathname + url.search)) {
+    throw new AppError('bad-request', 'The address holds a character that none has. Follow a link, or type it anew.');
+  }
+}

@@ -8,7 +8,7 @@ import { runInContext, type RequestContext } from '../context';
 import { AppError } from '../errors';
 import { takeToken, type Limit } from '../rate-limit';
 import { readJson, readQuery } from './body';
-import { clientAddress, refuseForeignWrites } from './guard';
+import { clientAddress, refuseForeignWrites, refuseOddAddress } from './guard';
 import { onceForKey } from './idempotency';
 import { fieldProblems, problemResponse } from './problem';
 
@@ -97,6 +97,7 @@ async function respond<A extends Access, P, Q, B, R>(
 ): Promise<Response> {
   const url = new URL(request.url);
   try {
+    refuseOddAddress(url);
     refuseForeignWrites(request);
     const address = clientAddress(request);
     takeToken(EVERY_CALL, address);

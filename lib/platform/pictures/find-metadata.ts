@@ -15,7 +15,7 @@ export function findMetadata(content: Uint8Array): string[] {
   const png = text.indexOf('eXIf');
   const exifAt = jpeg >= 0 ? jpeg + 6 : png >= 0 ? png + 4 : -1;
   if (exifAt >= 0) found.push('camera and date');
-  if (exifAt >= 0 && namesPosition(head, exifAt)) found.push('position');
+  if ((exifAt >= 0 && namesPosition(head, exifAt)) || text.includes('exif:GPS')) found.push('position');
   if (text.includes('http://ns.adobe.com/xap/') || text.includes('XML:com.adobe.xmp')) found.push('editing notes');
   if (text.includes('Photoshop 3.0')) found.push('captions and keywords');
   if (content[0] === 0x89 && /tEXt|iTXt|zTXt/.test(text)) found.push('text');

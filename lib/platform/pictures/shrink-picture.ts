@@ -1,7 +1,8 @@
 import 'server-only';
-import { execFile } from 'node:child_process';
 import path from 'node:path';
 import { AppError } from '../errors';
+import { oneAtATime } from '../jobs/one-at-a-time';
+import { runLimited } from '../jobs/run-limited';
 import { log } from '../log';
 
 export interface ShrunkSize {
@@ -10,45 +11,35 @@ export interface ShrunkSize {
   bytes: number;
 }
 
-const MOST_MEMORY_KB = 2_000_000;
-const MOST_MS = 30_000;
-
-let line: Promise<unknown> = Promise.resolve();
-
-/**
- * Two sizes of a picture, made in a child process under limits of memory and time, one picture at a time. V8's own
- * limit doesn't bound what a decoder takes, so the shell's does.
- *
- * @throws {AppError} unsupported-kind where the picture can't be decoded within them.
- */
-export function shrinkPicture(
-  input: string,
-  large: string,
-  small: string,
-): Promise<{ large: ShrunkSize; small: ShrunkSize }> {
-  const mine = line.then(() => runWorker(input, large, small));
-  line = mine.catch(() => undefined);
-  return mine;
+export interface ShrunkSizes {
+  large: ShrunkSize;
+  small: ShrunkSize;
 }
 
-function runWorker(input: string, large: string, small: string): Promise<{ large: ShrunkSize; small: ShrunkSize }> {
+/** 24 megapixels take some 900 MB and ten seconds on a small machine. */
+const MOST_MEMORY_KB = 2_000_000;
+const MOST_MS = 60_000;
+
+const takeTurn = oneAtATime(12);
+
+/**
+ * Two sizes of a picture, made in a process of its own, one picture at a time.
+ *
+ * @param input, large, small paths: what is read, and where the two sizes go.
+ * @throws {AppError} unsupported-kind where the picture can't be decoded within the limits; unavailable where too many
+ * wait.
+ */
+export function shrinkPicture(input: string, large: string, small: string): Promise<ShrunkSizes> {
   const worker = path.join(process.cwd(), 'lib/platform/pictures/shrink-worker.mjs');
-  const script = `ulimit -v ${MOST_MEMORY_KB}; exec "$0" "$@"`;
-  return new Promise((resolve, reject) => {
-    execFile(
-      'bash',
-      ['-c', script, process.execPath, worker, input, large, small],
-      // Nothing of the server's environment is the decoder's business.
-      { timeout: MOST_MS, killSignal: 'SIGKILL', env: { NODE_ENV: 'production' }, maxBuffer: 100_000 },
-      (error, stdout) => {
-        if (error) {
-          log().warn({ reason: error.message.slice(0, 300) }, 'a picture could not be decoded');
-          const message =
-            'The picture can’t be decoded; it may be cut off or too large. Save it again as JPEG and choose that file.';
-          return reject(new AppError('unsupported-kind', message));
-        }
-        resolve(JSON.parse(stdout) as { large: ShrunkSize; small: ShrunkSize });
-      },
-    );
+  return takeTurn(async () => {
+    try {
+      const args = [worker, input, large, small];
+      return JSON.parse(await runLimited({ args, mostMemoryKb: MOST_MEMORY_KB, mostMs: MOST_MS })) as ShrunkSizes;
+    } catch (error) {
+      log().warn({ reason: (error as Error).message }, 'a picture could not be decoded');
+      const message =
+        'The picture can’t be decoded; it may be cut off or too large. Save it again as JPEG and choose that file.';
+      throw new AppError('unsupported-kind', message);
+    }
   });
 }

@@ -58,6 +58,11 @@ export async function dropFile(anyPath: string): Promise<void> {
   await rm(anyPath, { force: true });
 }
 
+/** Takes back a kept file that no row came to name. */
+export async function dropKept(name: string): Promise<void> {
+  await dropFile(keptPath(name));
+}
+
 /** A kept file as a web stream with its size. */
 export async function openKept(name: string): Promise<{ stream: ReadableStream; bytes: number }> {
   const { size } = await stat(keptPath(name));

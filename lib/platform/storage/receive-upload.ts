@@ -5,6 +5,9 @@ import multer, { MulterError } from 'multer';
 import { AppError } from '../errors';
 import { dropFile, incomingFolder, storedName } from './files';
 
+/** Boundaries, part headers and fields of a multipart body. */
+const MOST_FRAME = 300_000;
+
 /** A file that has been received, and the fields that came with it. */
 export interface ReceivedUpload {
   path: string;
@@ -25,38 +28,23 @@ export async function receiveUpload(request: Request, mostBytes: number): Promis
     throw new AppError('unsupported-kind', 'Send the file as multipart/form-data, in the field “file”.');
   }
   if (!request.body) throw new AppError('bad-request', 'No file came. Choose one and send it again.');
-  const folder = await incomingFolder();
-  const parser = multer({
-    storage: multer.diskStorage({
-      destination: folder,
-      filename: (_request, _file, done) => done(null, storedName('part')),
-      // The file must be on the disk before a row names it.
-      flush: true,
-    } as multer.DiskStorageOptions),
-    limits: {
-      fieldNameSize: 60,
-      fieldSize: 20_000,
-      fields: 10,
-      fileSize: mostBytes,
-      files: 1,
-      parts: 12,
-      headerPairs: 50,
-    },
-  }).single('file');
+  // What says that it is too large need not travel first; the rest of a body is the file's frame.
+  const announced = Number(request.headers.get('content-length') ?? 0);
+  if (announced > mostBytes + MOST_FRAME) throw tooLarge(mostBytes);
   const incoming = asIncoming(request);
+  const parser = fileParser(await incomingFolder(), mostBytes);
+  // multer removes what it has written of a stream that ends early, and reports only then.
+  const cutOff = () => incoming.destroy(new Error('cut off'));
+  request.signal.addEventListener('abort', cutOff, { once: true });
   try {
     await new Promise<void>((resolve, reject) => {
-      request.signal.addEventListener('abort', () => {
-        incoming.destroy();
-        reject(new AppError('bad-request', 'The upload was cut off. Nothing was kept; send it again.'));
-      });
+      if (request.signal.aborted) cutOff();
       parser(incoming as never, new Writable() as unknown as ServerResponse as never, (error: unknown) =>
         error ? reject(asProblem(error, mostBytes)) : resolve(),
       );
     });
-  } catch (error) {
-    if (incoming.file) await dropFile(incoming.file.path);
-    throw error;
+  } finally {
+    request.signal.removeEventListener('abort', cutOff);
   }
   const { file } = incoming;
   if (!file) throw new AppError('bad-request', 'No file came in the field “file”. Choose one and send it again.');
@@ -74,6 +62,30 @@ export async function receiveUpload(request: Request, mostBytes: number): Promis
   };
 }
 
+function fileParser(folder: string, mostBytes: number) {
+  return multer({
+    storage: multer.diskStorage({
+      destination: folder,
+      filename: (_request, _file, done) => done(null, storedName('part')),
+      // The file must be on the disk before a row names it.
+      flush: true,
+    } as multer.DiskStorageOptions),
+    // Browsers write names as UTF-8; the parser's own default is Latin-1.
+    defParamCharset: 'utf8',
+    limits: {
+      fieldNameSize: 60,
+      fieldSize: 20_000,
+      fields: 10,
+      fieldNestingDepth: 0,
+      fieldArrayIndexLimit: 0,
+      fileSize: mostBytes,
+      files: 1,
+      parts: 12,
+      headerPairs: 50,
+    },
+  }).single('file');
+}
+
 type Incoming = Readable & Partial<IncomingMessage> & { file?: Express.Multer.File; body?: Record<string, unknown> };
 
 function asIncoming(request: Request): Incoming {
@@ -89,11 +101,7 @@ function asIncoming(request: Request): Incoming {
 function asProblem(error: unknown, mostBytes: number): AppError {
   if (error instanceof AppError) return error;
   if (error instanceof MulterError && error.code === 'LIMIT_FILE_SIZE') {
-    const most = Math.round(mostBytes / 1e6);
-    return new AppError(
-      'too-large',
-      `The file is larger than ${most} MB. Send a smaller one, or cut it to the part you need.`,
-    );
+    return tooLarge(mostBytes);
   }
   return new AppError(
     'bad-request',
@@ -101,10 +109,18 @@ function asProblem(error: unknown, mostBytes: number): AppError {
   );
 }
 
+function tooLarge(mostBytes: number): AppError {
+  const most = Math.round(mostBytes / 1e6);
+  return new AppError(
+    'too-large',
+    `The file is larger than ${most} MB. Send a smaller one, or cut it to what you need.`,
+  );
+}
+
 /** Without control characters and folders, at most 200 characters. */
 function readableName(name: string): string {
   const last = name.split(/[/\\]/).pop() ?? '';
-  // eslint-disable-next-line no-control-regex -- control characters are what this takes out
+   
   const clean = last.replace(/[\u0000-\u001f\u007f\u200b-\u200f\u202a-\u202e]/g, '').trim();
   return clean.slice(0, 200) || 'unnamed';
 }

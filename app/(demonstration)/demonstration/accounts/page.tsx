@@ -5,7 +5,7 @@ import { PageTitle } from '@/components/layout/headings';
 import { Sheet } from '@/components/layout/sheet';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
 import { runsAsDemonstration } from '@/lib/platform/env';
-import { DEMONSTRATION_ACCOUNTS } from '@/seeders/accounts';
+import { DEMONSTRATION_ACCOUNTS } from '@/lib/platform/demonstration-accounts';
 
 export const metadata: Metadata = { title: 'Accounts of the demonstration', robots: 'noindex' };
 

@@ -75,7 +75,7 @@ export default async function CategoryPage({ params }: CategoryPageProps) {
         {headline ? (
           <DotPlot
             size="full"
-            title={`${countWords(headline.n, 'device')}: median ${medianOf(headline).value} ${plainUnit(medianOf(headline).unit)}`}
+            title={`Median ${medianOf(headline).value} ${plainUnit(medianOf(headline).unit)}, from ${rangeOf(headline)}`}
             stones={headline.stones}
             median={headline.median}
             q1={headline.lowerQuartile ?? undefined}
