@@ -1,5 +1,14 @@
 import { createHash, randomBytes } from 'node:crypto';
-import { chmodSync, existsSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import {
+  chmodSync,
+  existsSync,
+  mkdirSync,
+  readdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
 import net from 'node:net';
 import path from 'node:path';
 import { boundToUs, Interrupted, run, say, StartError } from './console.mjs';
@@ -58,8 +67,9 @@ export async function startCluster({ root, name = 'cluster', forTests = false })
       await run('install', ['-d', '-m', '0755', '/var/lib/wattcairn'], { quiet: true });
       await run('install', ['-d', '-o', 'postgres', '-m', '0700', path.dirname(folder)], { quiet: true });
     }
-    const half = `${folder}.half-made`;
-    for (const left of [half, folder]) rmSync(left, { recursive: true, force: true });
+    rmSync(folder, { recursive: true, force: true });
+    dropHalfMade(folder);
+    const half = `${folder}.half-made-${Date.now()}`;
     // Through cat, because initdb opens its password file by name, and Node's own pipe is a socket without one.
     const initdb = [path.join(binaries, 'initdb'), '-D', half, '--locale=C.UTF-8', '-A', 'scram-sha-256', '-k'];
     await asOwner('sh', ['-c', 'cat | "$0" "$@" --pwfile=/dev/stdin', ...initdb, '-U', SUPERUSER], {
@@ -91,13 +101,30 @@ function serverOptions(port, forTests) {
   return [`-p ${port}`, ...settings.map((setting) => `-c ${setting}`)].join(' ');
 }
 
-/** What a server that was killed left in shared memory goes within a second or two; until then no other may start. */
-async function launch(exec, args, log, tries = 5) {
+/** Of starts that were killed. Their initdb may still be at work in its own folder for a moment: then it is left for later. */
+function dropHalfMade(folder) {
+  const beside = path.dirname(folder);
+  const names = readdirSync(beside).filter((name) => name.startsWith(`${path.basename(folder)}.half-made`));
+  for (const name of names) {
+    try {
+      rmSync(path.join(beside, name), { recursive: true, force: true, maxRetries: 2 });
+    } catch {
+      say(`${path.join(beside, name)} could not be removed yet; the next cluster that is made removes it.`);
+    }
+  }
+}
+
+/** A statement that was at work when its server was killed goes on to its end; until then no other server may start. */
+async function launch(exec, args, log, tries = 60) {
   try {
     await exec('pg_ctl', ['start', ...args]);
   } catch (error) {
     if (error instanceof Interrupted) throw error;
-    if (tries <= 1) throw new StartError(`PostgreSQL did not start. Its log is ${log}.\n${error.message}`);
+    const told = existsSync(log) ? readFileSync(log, 'utf8').split('\n').slice(-6).join('\n') : '';
+    if (tries <= 1 || !/shared memory block|lock file/.test(told)) {
+      throw new StartError(`PostgreSQL did not start. Its log is ${log} and ends with:\n${told || error.message}`);
+    }
+    if (tries === 60) say('Waiting for the last statement of a server that was killed …');
     await new Promise((resolve) => setTimeout(resolve, 1000));
     await launch(exec, args, log, tries - 1);
   }

@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process';
 import { existsSync } from 'node:fs';
+import path from 'node:path';
 
 /** A failure with a sentence that says what to do; anything else that is thrown is a bug and keeps its stack. */
 export class StartError extends Error {}
@@ -74,7 +75,7 @@ export async function run(
   });
   if (!tidies) running.add(child);
   try {
-    return await untilDone(child, [command, ...args].slice(0, 2).join(' '), { input, tidies });
+    return await untilDone(child, nameOf(command, args), { input, tidies });
   } finally {
     running.delete(child);
   }
@@ -93,6 +94,12 @@ function untilDone(child, name, { input, tidies }) {
     });
     if (input !== undefined) child.stdin?.end(input);
   });
+}
+
+/** As a person would say it: the program that Node runs, not Node. */
+function nameOf(command, args) {
+  const file = args.find((argument) => /\.(ts|mjs|js)$/.test(argument));
+  return [path.basename(command), file ? path.basename(file) : args[0]].filter(Boolean).join(' ');
 }
 
 /** Node with what our TypeScript programs need. */

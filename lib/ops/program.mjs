@@ -1,5 +1,5 @@
 import path from 'node:path';
-import { endOnSignals, explain, run, TYPESCRIPT } from './console.mjs';
+import { endOnSignals, explain, run, StartError, TYPESCRIPT } from './console.mjs';
 import { ensureDependencies } from './packages.mjs';
 import { runningStart } from './turn.mjs';
 
@@ -13,6 +13,9 @@ endOnSignals();
 const [file = '', ...args] = process.argv.slice(2);
 
 try {
+  if (file === 'reset.ts' && runningStart(root)) {
+    throw new StartError('The site runs on this database. End it with Ctrl-C first, then empty it.');
+  }
   await ensureDependencies(root);
   const { prepareEnvironment } = await import('./settings.mjs');
   const { env, cluster } = await prepareEnvironment(root);

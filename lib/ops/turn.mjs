@@ -68,7 +68,9 @@ const turnFile = (root) => path.join(root, '.data', 'running.json');
 
 /** When a process began, in the kernel's ticks: its number alone comes back for another one. Empty where there is none. */
 function startOf(pid) {
-  return statOf(pid)[19] ?? '';
+  const [state = 'X', ...rest] = statOf(pid);
+  // One that has ended stays in the list until its parent has heard of it.
+  return state === 'Z' || state === 'X' ? '' : (rest[18] ?? '');
 }
 
 const parentOf = (pid) => Number(statOf(pid)[1] ?? 0);
