@@ -10,7 +10,13 @@ const TONES: Partial<Record<ReportListItem['state'], 'good' | 'warning'>> = {
   declined: 'warning',
 };
 
-export function MyReports({ reports }: { reports: ReportListItem[] }) {
+interface MyReportsProps {
+  reports: ReportListItem[];
+  /** Where a report's line leads; to one's own view of it by default. */
+  hrefOf?: (report: ReportListItem) => string;
+}
+
+export function MyReports({ reports, hrefOf = (report) => `/reports/${report.publicId}/mine` }: MyReportsProps) {
   if (reports.length === 0) {
     return (
       <Empty title="You have not sent a measurement yet.">
@@ -21,7 +27,7 @@ export function MyReports({ reports }: { reports: ReportListItem[] }) {
     );
   }
   return (
-    <Table caption="My reports, the latest first">
+    <Table caption="Reports, the latest first">
       <thead>
         <tr>
           <Th>device</Th>
@@ -33,7 +39,7 @@ export function MyReports({ reports }: { reports: ReportListItem[] }) {
         {reports.map((report) => (
           <Tr key={report.publicId}>
             <Td>
-              <Link href={`/reports/${report.publicId}/mine`} className="text-lichen underline underline-offset-4">
+              <Link href={hrefOf(report)} className="text-lichen underline underline-offset-4">
                 {report.device}
               </Link>
             </Td>
