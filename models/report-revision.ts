@@ -23,6 +23,7 @@ export class ReportRevision extends Model<InferAttributes<ReportRevision>, Infer
   declare licence: 'CC-BY-4.0';
   declare previousHash: CreationOptional<string | null>;
   declare hash: string;
+  declare clientKey: CreationOptional<string | null>;
   declare createdAt: Date;
 }
 
@@ -43,6 +44,7 @@ export function initReportRevision(sequelize: Sequelize) {
       licence: { type: DataTypes.TEXT, allowNull: false },
       previousHash: { type: DataTypes.TEXT },
       hash: { type: DataTypes.TEXT, allowNull: false },
+      clientKey: { type: DataTypes.TEXT },
       createdAt: { type: DataTypes.DATE, allowNull: false },
     },
     { sequelize, modelName: 'ReportRevision', tableName: 'report_revision', underscored: true, timestamps: false },

@@ -23,6 +23,7 @@ export class Report extends Model<InferAttributes<Report>, InferCreationAttribut
   declare createdAt: Date;
   declare submittedAt: CreationOptional<Date | null>;
   declare decidedAt: CreationOptional<Date | null>;
+  declare withdrawalReason: CreationOptional<string | null>;
 }
 
 export function initReport(sequelize: Sequelize) {
@@ -41,6 +42,7 @@ export function initReport(sequelize: Sequelize) {
       createdAt: { type: DataTypes.DATE, allowNull: false },
       submittedAt: { type: DataTypes.DATE },
       decidedAt: { type: DataTypes.DATE },
+      withdrawalReason: { type: DataTypes.TEXT },
     },
     { sequelize, modelName: 'Report', tableName: 'report', underscored: true, timestamps: false },
   );

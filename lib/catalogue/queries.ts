@@ -1,5 +1,5 @@
 import 'server-only';
-import { QueryTypes } from 'sequelize';
+import { QueryTypes, type Transaction } from 'sequelize';
 import { database } from '@/lib/platform/database/connection';
 import { describeBasis, variantLabel } from './rules';
 import { conditionField, usePattern, type Category, type Device, type OperatingMode } from './schema';
@@ -33,17 +33,19 @@ export async function listCategories(): Promise<Category[]> {
   return selectCategories('order by c.name', []);
 }
 
-export async function categoryById(id: number): Promise<Category | null> {
-  return (await selectCategories('where c.id = $1', [id]))[0] ?? null;
+/** @param transaction where a command reads: a second connection for it could be the one that everybody waits for. */
+export async function categoryById(id: number, transaction?: Transaction): Promise<Category | null> {
+  return (await selectCategories('where c.id = $1', [id], transaction))[0] ?? null;
 }
 
 export async function categoryByPublicId(publicId: string): Promise<Category | null> {
   return (await selectCategories('where c.public_id = $1', [publicId]))[0] ?? null;
 }
 
-async function selectCategories(condition: string, bind: unknown[]): Promise<Category[]> {
+async function selectCategories(condition: string, bind: unknown[], transaction?: Transaction): Promise<Category[]> {
   const rows = await database().sequelize.query<CategoryRow>(`${CATEGORY} ${condition}`, {
     bind,
+    transaction,
     type: QueryTypes.SELECT,
   });
   return rows.map(({ parentName, parentSlug, basisQuantity, basisModeId, ...row }) => ({

@@ -2,7 +2,8 @@ import 'server-only';
 import { unstable_cache } from 'next/cache';
 import { cache } from 'react';
 import { AppError } from '@/lib/platform/errors';
-import { ambientOfDevice, reportByPublicId, reportsOfDevice } from './queries/reports';
+import { ambientOfDevice, reportsOfDevice } from './queries/report-lists';
+import { reportByPublicId } from './queries/reports';
 import type { ReportListItem, ReportView } from './schema';
 
 /** A published report, or why there is none to read. */

@@ -20,12 +20,17 @@ export function maySeeEvidence(actor: Someone, evidence: EvidenceStanding): bool
   return evidence.isSubmitted && isModerator(actor);
 }
 
-/** A report that was verified once is read by everybody; before that by its member and, once sent, by moderators. */
-export function maySeeReport(
-  actor: Someone,
-  report: { memberId: number; state: ReportState; isPublished: boolean },
-): boolean {
-  if (report.isPublished || actor?.memberId === report.memberId) return true;
+/** What a member called a file may say more than a measurement does, so it is for whoever works with the report. */
+export function maySeeFileName(actor: Someone, evidence: { memberId: number }): boolean {
+  return actor?.memberId === evidence.memberId || isModerator(actor);
+}
+
+/**
+ * What was not published (a first revision, an amendment that waits, a report that was withdrawn) is read by its member
+ * and, once sent, by moderators; what is published by everybody.
+ */
+export function maySeeUnpublished(actor: Someone, report: { memberId: number; state: ReportState }): boolean {
+  if (actor?.memberId === report.memberId) return true;
   return report.state !== 'draft' && isModerator(actor);
 }
 

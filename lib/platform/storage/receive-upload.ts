@@ -120,7 +120,7 @@ function tooLarge(mostBytes: number): AppError {
 /** Without control characters and folders, at most 200 characters. */
 function readableName(name: string): string {
   const last = name.split(/[/\\]/).pop() ?? '';
-   
+
   const clean = last.replace(/[\u0000-\u001f\u007f\u200b-\u200f\u202a-\u202e]/g, '').trim();
   return clean.slice(0, 200) || 'unnamed';
 }

@@ -10,13 +10,17 @@ import { canonicalJson } from '../rules/canonical-json';
 import { SCHEMA_VERSION, type Phase, type Submission } from '../schema';
 import type { Evidence } from './gather-evidence';
 
-/** Adds a revision to a report: its content, chained by hash to the one before, its phases, evidence and figures. */
+/**
+ * Adds a revision to a report: its content, chained by hash to the one before, its phases, evidence and figures.
+ * @param clientKey of an amendment; a report's first revision goes by the report's own.
+ */
 export async function addRevision(
   work: Work,
   report: Report,
   category: Category,
   { content }: Submission,
   evidence: Evidence,
+  clientKey: string | null,
 ): Promise<number> {
   const { models, transaction } = work;
   const before = await models.ReportRevision.findOne({
@@ -49,6 +53,7 @@ export async function addRevision(
       licence: 'CC-BY-4.0',
       previousHash,
       hash: sha256(canonicalJson(sealed)),
+      clientKey,
       createdAt: now(),
     },
     { transaction },

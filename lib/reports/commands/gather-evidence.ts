@@ -1,16 +1,18 @@
 import 'server-only';
 import type { Category } from '@/lib/catalogue/schema';
-import type { Trace } from '@/lib/measurement/traces/trace';
-import type { StatedAccuracy } from '@/lib/measurement/uncertainty/types';
+import { now } from '@/lib/platform/clock';
 import type { Work } from '@/lib/platform/database/transaction';
 import { AppError, type FieldProblem } from '@/lib/platform/errors';
 import type { Attachment } from '@/models/attachment';
 import type { InstrumentRevision } from '@/models/instrument-revision';
 import type { MethodRevision } from '@/models/method-revision';
 import type { Trace as TraceRow } from '@/models/trace';
-import { readSeries } from '../queries/traces';
-import { computeFigures, type Computation } from '../rules/compute-figures';
+import { checkContent } from '../rules/check-content';
+import { exchangedModes } from '../rules/check-modes';
+import type { Computation } from '../rules/compute-figures';
 import type { Submission } from '../schema';
+import { computeFromTraces } from './compute-from-traces';
+import { findInstrument, findMethod, findTraces } from './find-evidence';
 
 /** Everything that a submission refers to, found and its member's own, and the figures that follow. */
 export interface Evidence {
@@ -21,101 +23,89 @@ export interface Evidence {
   computation: Computation;
 }
 
-/** @throws {AppError} bad-input naming each field that refers to nothing, or yields nothing. */
+/** @throws {AppError} bad-input naming each field that refers to nothing, contradicts another, or yields nothing. */
 export async function gatherEvidence(
   work: Work,
   memberId: number,
   category: Category,
   { content, instrumentPublicId }: Submission,
 ): Promise<Evidence> {
-  const problems: FieldProblem[] = [];
-  const problem = (pointer: string, message: string) => problems.push({ pointer, message });
   const instrument = await findInstrument(work, memberId, instrumentPublicId);
-  if (!instrument) problem('/instrumentPublicId', 'Choose one of your instruments.');
-  else if (!instrument.supplies.includes(content.supplyClass)) {
-    problem(
-      '/instrumentPublicId',
-      'This instrument doesn’t measure that supply. Choose another, or correct the supply.',
-    );
-  }
   const method = await findMethod(work, content.methodCode);
-  if (!method) problem('/content/methodCode', 'Choose a method from the list.');
-  else if (method.needsConfirmation && !content.cautionConfirmed) {
-    problem('/content/cautionConfirmed', 'Read the caution of this method and confirm that it was kept to.');
-  }
-  const modes = new Set(category.modes.map((mode) => mode.code));
-  content.phases.forEach((phase, i) => {
-    if (!modes.has(phase.modeCode))
-      problem(`/content/phases/${i}/modeCode`, 'Choose one of the category’s operating modes.');
-  });
   const traces = await findTraces(work, memberId, content.traces);
-  content.phases.forEach((phase, i) => {
-    if (phase.source === 'trace' && !traces.has(phase.tracePublicId)) {
-      problem(`/content/phases/${i}/tracePublicId`, 'This phase’s trace is not among the report’s. Import it again.');
-    }
-  });
-  const photos = await work.models.Attachment.findAll({
-    where: { publicId: content.photos.map((photo) => photo.publicId), memberId },
-    transaction: work.transaction,
-  });
-  if (photos.length !== new Set(content.photos.map((photo) => photo.publicId)).size) {
-    problem('/content/photos', 'One of the photos is not there any more. Add it again.');
-  }
+  const photos = await findPhotos(work, memberId, content);
+  const problems: FieldProblem[] = [
+    ...instrumentProblems(instrument, content),
+    ...methodProblems(method, content),
+    ...checkContent(content, {
+      now: now(),
+      modeCodes: new Set(category.modes.map((mode) => mode.code)),
+      conditionKeys: new Set(category.conditions.map((condition) => condition.key)),
+      traces,
+    }),
+    ...photoProblems(photos, content),
+  ];
   if (problems.length > 0 || !instrument || !method) throw incomplete(problems);
-  const series = new Map<string, Trace>();
-  for (const [publicId, row] of traces) series.set(publicId, await readSeries(row));
-  const computation = computeFigures({
+  const computation = await computeFromTraces({
     duty: category.duty,
     phases: content.phases,
-    accuracy: statedAccuracy(instrument),
-    traceOf: (publicId) => series.get(publicId) as Trace,
+    supplyClass: content.supplyClass,
+    voltsMeasured: content.supplyVolts !== null,
+    instrument,
+    traces,
   });
-  if (computation.figures.length === 0) {
-    const [first] = computation.refusals;
-    throw incomplete([
-      { pointer: '/content/phases', message: first?.reason ?? 'No figure follows from these phases.' },
-    ]);
-  }
+  const doubts = figureProblems(computation, content, category);
+  if (doubts.length > 0) throw incomplete(doubts);
   return { method, instrument, traces, photos, computation };
 }
 
-/** What the computation needs to know of an instrument. */
-export function statedAccuracy(revision: StatedAccuracy): StatedAccuracy {
-  return {
-    percentOfReading: revision.percentOfReading,
-    percentOfRange: revision.percentOfRange,
-    rangeWatts: revision.rangeWatts,
-    counts: revision.counts,
-    resolutionWatts: revision.resolutionWatts,
-    resolutionWattHours: revision.resolutionWattHours,
-    lowerLimitWatts: revision.lowerLimitWatts,
-    readsTruePower: revision.readsTruePower,
-  };
+type Content = Submission['content'];
+
+function instrumentProblems(instrument: InstrumentRevision | null, { supplyClass }: Content): FieldProblem[] {
+  const pointer = '/instrumentPublicId';
+  if (!instrument) return [{ pointer, message: 'Choose one of your instruments.' }];
+  if (instrument.supplies.includes(supplyClass)) return [];
+  const message = 'This instrument doesn’t measure that supply. Choose another, or correct the supply.';
+  return [{ pointer, message }];
 }
 
-export async function findInstrument(
-  work: Work,
-  memberId: number,
-  publicId: string,
-): Promise<InstrumentRevision | null> {
-  const { Instrument, InstrumentRevision: Revision } = work.models;
-  const row = await Instrument.findOne({ where: { publicId, memberId }, transaction: work.transaction });
-  return row?.currentRevisionId ? Revision.findByPk(row.currentRevisionId, { transaction: work.transaction }) : null;
+function methodProblems(method: MethodRevision | null, { cautionConfirmed }: Content): FieldProblem[] {
+  if (!method) return [{ pointer: '/content/methodCode', message: 'Choose a method from the list.' }];
+  if (!method.needsConfirmation || cautionConfirmed) return [];
+  const message = 'Read the caution of this method and confirm that it was kept to.';
+  return [{ pointer: '/content/cautionConfirmed', message }];
 }
 
-async function findMethod(work: Work, code: string): Promise<MethodRevision | null> {
-  const row = await work.models.Method.findOne({ where: { code }, transaction: work.transaction });
-  return row?.currentRevisionId
-    ? work.models.MethodRevision.findByPk(row.currentRevisionId, { transaction: work.transaction })
-    : null;
-}
-
-export async function findTraces(work: Work, memberId: number, publicIds: string[]): Promise<Map<string, TraceRow>> {
-  const rows = await work.models.Trace.findAll({
-    where: { publicId: publicIds, memberId },
+function findPhotos(work: Work, memberId: number, { photos }: Content): Promise<Attachment[]> {
+  return work.models.Attachment.findAll({
+    where: { publicId: photos.map((photo) => photo.publicId), memberId },
     transaction: work.transaction,
   });
-  return new Map(rows.map((row) => [row.publicId, row]));
+}
+
+function photoProblems(found: Attachment[], { photos }: Content): FieldProblem[] {
+  const known = new Set(found.map((photo) => photo.publicId));
+  return photos.flatMap(({ publicId }, i) =>
+    known.has(publicId)
+      ? []
+      : [{ pointer: `/content/photos/${i}`, message: 'This photo is not there any more. Add it again.' }],
+  );
+}
+
+/** What only the figures show: none at all, or modes that were exchanged. */
+function figureProblems({ figures, refusals }: Computation, { phases }: Content, category: Category): FieldProblem[] {
+  if (figures.length === 0) {
+    const [first] = refusals;
+    return [{ pointer: '/content/phases', message: first?.reason ?? 'No figure follows from these phases.' }];
+  }
+  const nameOf = (code: string) => category.modes.find((mode) => mode.code === code)?.name ?? code;
+  return exchangedModes(figures).map(({ rest, work }) => ({
+    pointer: `/content/phases/${Math.max(
+      0,
+      phases.findIndex((phase) => phase.modeCode === rest),
+    )}/modeCode`,
+    message: `${nameOf(rest)} draws more than ${nameOf(work)} here. Were the two exchanged?`,
+  }));
 }
 
 function incomplete(fields: FieldProblem[]): AppError {

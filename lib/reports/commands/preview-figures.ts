@@ -1,12 +1,26 @@
 import 'server-only';
 import type { Category } from '@/lib/catalogue/schema';
-import type { Trace } from '@/lib/measurement/traces/trace';
 import type { Work } from '@/lib/platform/database/transaction';
 import { AppError } from '@/lib/platform/errors';
-import { readSeries } from '../queries/traces';
-import { computeFigures, type Computation } from '../rules/compute-figures';
-import type { Phase } from '../schema';
-import { findInstrument, findTraces, statedAccuracy } from './gather-evidence';
+import type { Computation } from '../rules/compute-figures';
+import { whatIsMissing } from '../rules/what-is-missing';
+import type { Phase, ReportContent } from '../schema';
+import { computeFromTraces } from './compute-from-traces';
+import { findInstrument, findMethod, findTraces } from './find-evidence';
+
+export interface FiguresToPreview {
+  instrumentPublicId: string;
+  phases: Phase[];
+  supplyClass: ReportContent['supplyClass'];
+  supplyVolts: number | null;
+  /** Null where none is chosen yet: then nothing is held against its minimum. */
+  methodCode: string | null;
+}
+
+export interface Preview extends Computation {
+  /** What the report lacks of its method's minimum, in words. */
+  missing: string[];
+}
 
 /**
  * The figures that phases would yield with an instrument; nothing is kept.
@@ -16,22 +30,28 @@ export async function previewFigures(
   work: Work,
   memberId: number,
   category: Category,
-  instrumentPublicId: string,
-  phases: Phase[],
-): Promise<Computation> {
+  { instrumentPublicId, phases, supplyClass, supplyVolts, methodCode }: FiguresToPreview,
+): Promise<Preview> {
   const instrument = await findInstrument(work, memberId, instrumentPublicId);
   if (!instrument) throw new AppError('bad-input', 'Choose one of your instruments first.');
-  const wanted = phases.flatMap((phase) => (phase.source === 'trace' ? [phase.tracePublicId] : []));
-  const rows = await findTraces(work, memberId, [...new Set(wanted)]);
-  const series = new Map<string, Trace>();
-  for (const [publicId, row] of rows) series.set(publicId, await readSeries(row));
-  if (wanted.some((publicId) => !series.has(publicId))) {
+  const wanted = [...new Set(phases.flatMap((phase) => (phase.source === 'trace' ? [phase.tracePublicId] : [])))];
+  const traces = await findTraces(work, memberId, wanted);
+  if (wanted.some((publicId) => !traces.has(publicId))) {
     throw new AppError('bad-input', 'A phase’s trace is not there any more. Import it again.');
   }
-  return computeFigures({
+  const computation = await computeFromTraces({
     duty: category.duty,
     phases,
-    accuracy: statedAccuracy(instrument),
-    traceOf: (publicId) => series.get(publicId) as Trace,
+    supplyClass,
+    voltsMeasured: supplyVolts !== null,
+    instrument,
+    traces,
   });
+  const method = methodCode === null ? null : await findMethod(work, methodCode);
+  const seconds = phases.reduce((sum, phase) => sum + secondsOf(phase), 0);
+  return { ...computation, missing: method ? whatIsMissing(method, computation, seconds) : [] };
+}
+
+function secondsOf(phase: Phase): number {
+  return phase.source === 'typed' ? phase.durationSeconds : phase.toSeconds - phase.fromSeconds;
 }

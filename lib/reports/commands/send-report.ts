@@ -1,8 +1,5 @@
 import 'server-only';
 import { UniqueConstraintError } from 'sequelize';
-import { proposeDevice } from '@/lib/catalogue/commands';
-import { categoryById } from '@/lib/catalogue/queries';
-import type { Category } from '@/lib/catalogue/schema';
 import { now } from '@/lib/platform/clock';
 import { recordEvent } from '@/lib/platform/database/record-event';
 import { brokenConstraint, inTransaction, type Work } from '@/lib/platform/database/transaction';
@@ -15,10 +12,11 @@ import { mayAmend } from '../policy';
 import type { Submission } from '../schema';
 import { addRevision } from './add-revision';
 import { gatherEvidence } from './gather-evidence';
+import { categoryOf, field, findOrAddUnit, resolveDevice } from './resolve-device';
 
 export interface SendOptions {
   memberId: number;
-  /** Made by the client: the same key again is the same report. */
+  /** Made by the client: the same key again is the same report, or the same revision of it. */
   clientKey: string;
   /** The report that this amends, or null for a new one. */
   amendsPublicId: string | null;
@@ -30,11 +28,13 @@ export interface SendOptions {
  * Sends a report for review: device, unit, revision with its phases, evidence and figures, all or nothing.
  *
  * @returns the report's public id; of a repeated key the one that it made first.
- * @throws {AppError} bad-input with the fields concerned.
+ * @throws {AppError} bad-input with the fields concerned; conflict where the report to amend waits for a verdict.
  */
 export async function sendReport(options: SendOptions): Promise<string> {
   try {
-    return await inTransaction((work) => send(work, options));
+    return await inTransaction((work) =>
+      options.amendsPublicId === null ? sendNew(work, options) : amend(work, options),
+    );
   } catch (error) {
     if (!(error instanceof UniqueConstraintError) || brokenConstraint(error) !== 'report_member_id_client_key_key')
       throw error;
@@ -47,103 +47,72 @@ export async function sendReport(options: SendOptions): Promise<string> {
   }
 }
 
-async function send(work: Work, options: SendOptions): Promise<string> {
-  const { submission, memberId } = options;
+async function sendNew(work: Work, options: SendOptions): Promise<string> {
+  const { submission, memberId, clientKey } = options;
   const known = await reportOfKey(work, options);
-  if (known && options.amendsPublicId === null) return known.publicId;
+  if (known) return known.publicId;
   const { deviceId, variantId } = await resolveDevice(work, memberId, submission);
   const category = await categoryOf(work, deviceId);
   const evidence = await gatherEvidence(work, memberId, category, submission);
   const unitId = await findOrAddUnit(work, memberId, deviceId, submission.content.unitLabel);
-  const report =
-    options.amendsPublicId === null
-      ? await work.models.Report.create(
-          {
-            publicId: publicId(),
-            memberId,
-            deviceId,
-            variantId,
-            unitId,
-            clientKey: options.clientKey,
-            state: 'draft',
-            createdAt: now(),
-          },
-          { transaction: work.transaction },
-        )
-      : await lockForAmending(work, memberId, options.amendsPublicId);
-  const revisionId = await addRevision(work, report, category, submission, evidence);
+  const report = await work.models.Report.create(
+    { publicId: publicId(), memberId, deviceId, variantId, unitId, clientKey, state: 'draft', createdAt: now() },
+    { transaction: work.transaction },
+  );
+  const revisionId = await addRevision(work, report, category, submission, evidence, null);
+  return submit(work, options, report, revisionId);
+}
+
+/**
+ * An amendment is of the same device, variant and unit: moving them now would move published figures before the
+ * verdict. What was verified stays published until the amendment is.
+ */
+async function amend(work: Work, options: SendOptions): Promise<string> {
+  const { submission, memberId, clientKey } = options;
+  const { models, transaction } = work;
+  const report = await models.Report.findOne({
+    where: { publicId: options.amendsPublicId as string, memberId },
+    transaction,
+    lock: transaction.LOCK.UPDATE,
+  });
+  if (!report) throw notFound('report');
+  const known = await models.ReportRevision.findOne({ where: { reportId: report.id, clientKey }, transaction });
+  if (known) return report.publicId;
+  if (!mayAmend({ memberId, role: 'member' }, report)) {
+    const message = 'A report that waits for review can’t be changed. Withdraw it, or wait for the verdict.';
+    throw new AppError('conflict', message, { facts: { state: report.state } });
+  }
+  const { deviceId } = await resolveDevice(work, memberId, submission);
+  if (deviceId !== report.deviceId) {
+    throw field('/device', 'An amendment is of the same device. For another one, send a new report.');
+  }
+  const category = await categoryOf(work, deviceId);
+  const evidence = await gatherEvidence(work, memberId, category, submission);
+  const revisionId = await addRevision(work, report, category, submission, evidence, clientKey);
+  return submit(work, options, report, revisionId);
+}
+
+async function submit(work: Work, options: SendOptions, report: Report, revisionId: number): Promise<string> {
   const before = report.state;
-  // An amendment is of the same variant and unit: moving them now would move published figures before the verdict.
   await report.update(
     { state: 'submitted', pendingRevisionId: revisionId, submittedAt: now() },
     { transaction: work.transaction },
   );
   await closeDraft(work, options);
   await recordEvent(work, {
-    actorId: memberId,
+    actorId: options.memberId,
     action: 'report.submitted',
     subject: { kind: 'report', id: report.id },
     before: { state: before },
     after: { state: 'submitted', revisionId },
   });
-  await tellReceived(work, memberId, report);
+  await tellReceived(work, options.memberId, report);
   work.dropTag(`report:${report.publicId}`);
   return report.publicId;
 }
 
 function reportOfKey(work: Work, { memberId, clientKey }: SendOptions): Promise<Report | null> {
   return work.models.Report.findOne({ where: { memberId, clientKey }, transaction: work.transaction });
-}
-
-async function resolveDevice(work: Work, memberId: number, { device }: Submission) {
-  if (device.from === 'proposal') return proposeDevice(work, memberId, device.proposal);
-  const row = await work.models.Device.findOne({ where: { publicId: device.publicId }, transaction: work.transaction });
-  if (!row || row.state === 'refused')
-    throw field('/device', 'There is no such device. Choose one by search, or propose it.');
-  return { deviceId: row.mergedIntoId ?? row.id, variantId: row.mergedIntoId === null ? device.variantId : null };
-}
-
-async function categoryOf(work: Work, deviceId: number): Promise<Category> {
-  const device = await work.models.Device.findByPk(deviceId, { transaction: work.transaction, rejectOnEmpty: true });
-  const category = await categoryById(device.categoryId);
-  if (!category) throw field('/device', 'This device’s category is not in use any more. Choose another device.');
-  return category;
-}
-
-/** The physical specimen, by its label among the units of this device that the member has registered. */
-async function findOrAddUnit(
-  work: Work,
-  memberId: number,
-  deviceId: number,
-  label: string | null,
-): Promise<number | null> {
-  if (!label) return null;
-  const where = { deviceId, label, registeredById: memberId };
-  const [unit] = await work.models.Unit.findOrCreate({
-    where,
-    defaults: { ...where, publicId: publicId(), createdAt: now() },
-    transaction: work.transaction,
-  });
-  return unit.id;
-}
-
-async function lockForAmending(work: Work, memberId: number, reportPublicId: string): Promise<Report> {
-  const report = await work.models.Report.findOne({
-    where: { publicId: reportPublicId, memberId },
-    transaction: work.transaction,
-    lock: work.transaction.LOCK.UPDATE,
-  });
-  if (!report) throw notFound('report');
-  if (!mayAmend({ memberId, role: 'member' }, report)) {
-    throw new AppError(
-      'conflict',
-      'A report that waits for review can’t be changed. Withdraw it, or wait for the verdict.',
-      {
-        facts: { state: report.state },
-      },
-    );
-  }
-  return report;
 }
 
 async function closeDraft(work: Work, { draftPublicId, memberId }: SendOptions): Promise<void> {
@@ -162,11 +131,7 @@ async function tellReceived(work: Work, memberId: number, report: Report): Promi
     subject: 'Your report was received',
     paragraphs: [
       'Your measurement report was received and waits for a moderator. You will hear what comes of it.',
-      { label: 'See the report', href: `${env().publicOrigin}/reports/${report.publicId}` },
+      { label: 'See the report', href: `${env().publicOrigin}/reports/${report.publicId}/mine` },
     ],
   });
-}
-
-function field(pointer: string, message: string): AppError {
-  return new AppError('bad-input', message, { fields: [{ pointer, message }] });
 }

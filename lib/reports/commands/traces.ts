@@ -1,22 +1,24 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
+import path from 'node:path';
 import { Op } from 'sequelize';
-import { importTrace } from '@/lib/measurement/traces/import/import-trace';
 import { IMPORTER_VERSION, type TraceCorrections, type TraceDescription } from '@/lib/measurement/traces/import/types';
-import { traceLevels } from '@/lib/measurement/traces/levels';
-import type { Trace } from '@/lib/measurement/traces/trace';
 import { now, secondsFromNow } from '@/lib/platform/clock';
 import { database } from '@/lib/platform/database/connection';
 import { AppError, notFound } from '@/lib/platform/errors';
 import { publicId } from '@/lib/platform/ids';
-import { dropFile, keepFile, keptPath, storedName, writeKept } from '@/lib/platform/storage/files';
+import { dropFile, incomingFolder, keepFile, keptPath, storedName } from '@/lib/platform/storage/files';
 import type { ReceivedUpload } from '@/lib/platform/storage/receive-upload';
 import type { TraceUpload } from '@/models/trace-upload';
-import { encodeSeries } from '../rules/trace-series';
+import { canonicalJson } from '../rules/canonical-json';
+import { dropOldReadings } from './drop-old-readings';
+import { dropUnnamed } from './drop-unnamed';
+import { readLog } from './read-log';
+import type { LogReading } from './read-log-here';
 
 /** A day's worth of the largest ordinary files; more at once is no evening's measuring. */
-const MOST_BYTES_A_DAY = 600_000_000;
+export const MOST_LOG_BYTES_A_DAY = 600_000_000;
 
 /** What came of reading a file: a trace, or what must be answered first. */
 export type TraceReading =
@@ -37,11 +39,12 @@ export async function acceptTrace(
   upload: ReceivedUpload,
   options: ReadingOptions,
 ): Promise<TraceReading> {
+  const series = await seriesPath();
+  const storedFile = storedName('log');
   try {
     await refuseOverQuota(memberId, upload.bytes);
     const fileHash = await hashOf(upload.path);
-    const read = await readFile(upload.path, options);
-    const storedFile = storedName('log');
+    const reading = await readOrRefuse(upload.path, upload.bytes, series, options);
     await keepFile(upload.path, storedFile);
     const row = await database().models.TraceUpload.create({
       publicId: publicId(),
@@ -52,68 +55,99 @@ export async function acceptTrace(
       storedFile,
       createdAt: now(),
     });
-    return await keepReading(row, read, options);
+    return await keepReading(row, reading, series, options);
   } catch (error) {
-    await dropFile(upload.path);
+    await dropUnnamed([storedFile]);
     throw error;
+  } finally {
+    await dropFile(upload.path);
+    await dropFile(series);
   }
 }
 
-/** Reads a kept file again with what the member set right: another trace, since a trace never changes. */
+/**
+ * Reads a kept file again with what the member set right: another trace, since a trace never changes. The same
+ * corrections again are the same trace.
+ */
 export async function readAgain(
   memberId: number,
   uploadPublicId: string,
   options: ReadingOptions,
 ): Promise<TraceReading> {
-  const row = await database().models.TraceUpload.findOne({ where: { publicId: uploadPublicId, memberId } });
+  const { Trace, TraceUpload } = database().models;
+  const row = await TraceUpload.findOne({ where: { publicId: uploadPublicId, memberId } });
   if (!row) throw notFound('file');
-  return keepReading(row, await readFile(keptPath(row.storedFile), options), options);
+  const before = await Trace.findAll({
+    where: { uploadId: row.id, zone: options.zone, importerVersion: IMPORTER_VERSION },
+  });
+  const same = before.find((trace) => canonicalJson(trace.corrections) === canonicalJson(options.corrections));
+  if (same) {
+    const description = same.description as TraceDescription;
+    return { status: 'read', uploadPublicId: row.publicId, tracePublicId: same.publicId, description };
+  }
+  const series = await seriesPath();
+  try {
+    const reading = await readOrRefuse(keptPath(row.storedFile), row.fileBytes, series, options);
+    return await keepReading(row, reading, series, options);
+  } finally {
+    await dropFile(series);
+  }
 }
 
-type Reading = { description: TraceDescription; trace: Trace | null };
+async function seriesPath(): Promise<string> {
+  return path.join(await incomingFolder(), storedName('series'));
+}
 
-async function readFile(path: string, options: ReadingOptions): Promise<Reading> {
-  const result = await importTrace(createReadStream(path, { highWaterMark: 64 * 1024 }), options);
-  if (result.ok) return { description: result.description, trace: result.trace };
-  if (result.problem === null) return { description: result.description, trace: null };
-  throw new AppError('bad-input', result.problem.message, {
-    fields: [{ pointer: '/file', message: result.problem.message }],
-    facts: { problem: result.problem.code, line: result.problem.line },
+async function readOrRefuse(
+  log: string,
+  bytes: number,
+  series: string,
+  options: ReadingOptions,
+): Promise<Exclude<LogReading, { status: 'unreadable' }>> {
+  const reading = await readLog({ log, series, ...options }, bytes);
+  if (reading.status !== 'unreadable') return reading;
+  const { code, message, line } = reading.problem;
+  throw new AppError('bad-input', message, {
+    fields: [{ pointer: '/file', message }],
+    facts: { problem: code, line },
   });
 }
 
 async function keepReading(
   upload: TraceUpload,
-  { description, trace }: Reading,
+  reading: Exclude<LogReading, { status: 'unreadable' }>,
+  series: string,
   options: ReadingOptions,
 ): Promise<TraceReading> {
-  if (!trace) return { status: 'needs-answers', uploadPublicId: upload.publicId, description };
+  const { description } = reading;
+  if (reading.status !== 'read') return { status: 'needs-answers', uploadPublicId: upload.publicId, description };
+  const { startsAtSeconds, endsAtSeconds, ...summary } = reading.summary;
   const storedSeries = storedName('series');
-  await writeKept(storedSeries, encodeSeries(trace));
-  const at = (i: number) => new Date((trace.timeSeconds[i] as number) * 1000);
-  const row = await database().models.Trace.create({
-    publicId: publicId(),
-    memberId: upload.memberId,
-    uploadId: upload.id,
-    fileName: upload.fileName,
-    fileHash: upload.fileHash,
-    fileBytes: upload.fileBytes,
-    storedFile: upload.storedFile,
-    storedSeries,
-    kind: trace.kind,
-    powerKind: trace.powerKind,
-    zone: options.zone,
-    description,
-    corrections: options.corrections,
-    importerVersion: IMPORTER_VERSION,
-    samples: trace.timeSeconds.length,
-    startsAt: at(0),
-    endsAt: at(trace.timeSeconds.length - 1),
-    averagingSeconds: trace.averagingSeconds,
-    step: trace.step,
-    levels: traceLevels(trace),
-    createdAt: now(),
-  });
+  await keepFile(series, storedSeries);
+  const row = await database()
+    .models.Trace.create({
+      ...summary,
+      publicId: publicId(),
+      memberId: upload.memberId,
+      uploadId: upload.id,
+      fileName: upload.fileName,
+      fileHash: upload.fileHash,
+      fileBytes: upload.fileBytes,
+      storedFile: upload.storedFile,
+      storedSeries,
+      zone: options.zone,
+      description,
+      corrections: options.corrections,
+      importerVersion: IMPORTER_VERSION,
+      startsAt: new Date(startsAtSeconds * 1000),
+      endsAt: new Date(endsAtSeconds * 1000),
+      createdAt: now(),
+    })
+    .catch(async (error: unknown) => {
+      await dropUnnamed([storedSeries]);
+      throw error;
+    });
+  await dropOldReadings(upload.id);
   return { status: 'read', uploadPublicId: upload.publicId, tracePublicId: row.publicId, description };
 }
 
@@ -121,18 +155,16 @@ async function refuseOverQuota(memberId: number, bytes: number): Promise<void> {
   const recent = await database().models.TraceUpload.sum('fileBytes', {
     where: { memberId, createdAt: { [Op.gt]: secondsFromNow(-86_400) } },
   });
-  const left = MOST_BYTES_A_DAY - (recent ?? 0);
+  const left = MOST_LOG_BYTES_A_DAY - (recent ?? 0);
   if (bytes > left) {
     const mb = Math.max(0, Math.floor(left / 1e6));
-    throw new AppError(
-      'quota-reached',
-      `You have ${mb} MB of logs left today. Send a smaller file, or go on tomorrow.`,
-    );
+    const message = `Of the 600 MB of logs that a member may send within a day, ${mb} MB are left to you. Send a smaller file, or go on tomorrow.`;
+    throw new AppError('quota-reached', message, { facts: { bytesLeft: Math.max(0, left) } });
   }
 }
 
-async function hashOf(path: string): Promise<string> {
+async function hashOf(file: string): Promise<string> {
   const hash = createHash('sha256');
-  for await (const chunk of createReadStream(path)) hash.update(chunk as Uint8Array);
+  for await (const chunk of createReadStream(file)) hash.update(chunk as Uint8Array);
   return hash.digest('hex');
 }

@@ -8,9 +8,14 @@ import { mayWithdraw } from '../policy';
 
 /**
  * Withdraws one's own report: it stays on the record, but counts nowhere any more.
+ * @param reason for whoever follows a link to it, or null.
  * @throws {AppError} not-found where it is not one's own; conflict where its state doesn't allow it.
  */
-export async function withdrawReport(actor: Actor, reportPublicId: string): Promise<void> {
+export async function withdrawReport(
+  actor: Actor,
+  reportPublicId: string,
+  reason: string | null = null,
+): Promise<void> {
   await inTransaction(async (work) => {
     const report = await work.models.Report.findOne({
       where: { publicId: reportPublicId, memberId: actor.memberId },
@@ -24,7 +29,10 @@ export async function withdrawReport(actor: Actor, reportPublicId: string): Prom
       });
     }
     const before = report.state;
-    await report.update({ state: 'withdrawn', decidedAt: now() }, { transaction: work.transaction });
+    await report.update(
+      { state: 'withdrawn', decidedAt: now(), withdrawalReason: reason },
+      { transaction: work.transaction },
+    );
     await recordEvent(work, {
       actorId: actor.memberId,
       action: 'report.withdrawn',

@@ -10,6 +10,7 @@ const draft = z.object({
   version: z.int(),
   content: z.record(z.string(), z.unknown()),
   updatedAt: z.string(),
+  amendsPublicId: z.string().nullable(),
 });
 const params = z.object({ id: z.string() });
 const saved = z.object({ publicId: z.string(), version: z.int() });
@@ -28,12 +29,14 @@ export const beginDraftRoute = defineRoute({
   operationId: 'beginDraft',
   method: 'POST',
   path: '/api/v1/drafts',
-  summary: 'Begins a draft of a report.',
+  summary: 'Begins a draft, of a new report or of an amendment.',
   access: 'member',
   idempotent: true,
-  body: z.object({ content: draftContent }),
+  body: z.object({ content: draftContent, amendsPublicId: z.string().nullable().optional() }),
   success: { status: 201, description: 'Its id and first version.', body: saved },
-  handle: async ({ actor, body }) => ({ body: await beginDraft(actor.memberId, body.content) }),
+  handle: async ({ actor, body }) => ({
+    body: await beginDraft(actor.memberId, body.content, body.amendsPublicId ?? null),
+  }),
 });
 
 export const getDraftRoute = defineRoute({

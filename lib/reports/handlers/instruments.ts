@@ -2,7 +2,7 @@ import 'server-only';
 import { z } from 'zod';
 import { inTransaction } from '@/lib/platform/database/transaction';
 import { defineRoute } from '@/lib/platform/http/route';
-import { addInstrument, reviseInstrument } from '../commands/instruments';
+import { addInstrument, retireInstrument, reviseInstrument } from '../commands/instruments';
 import { instrumentsOf } from '../queries/instruments';
 import { instrument, instrumentInput } from '../schema';
 
@@ -37,15 +37,34 @@ export const reviseInstrumentRoute = defineRoute({
   operationId: 'reviseInstrument',
   method: 'PUT',
   path: '/api/v1/instruments/{id}',
-  summary: 'Changes an instrument: a new revision, while reports keep the one they were measured with.',
+  summary: 'Changes the instrument whose revision If-Match names: a new one, while reports keep theirs.',
   access: 'member',
   params: z.object({ id: z.string() }),
   body: instrumentInput,
   success: { status: 200, description: 'My instruments as they are now.', body: list },
-  handle: async ({ actor, params, body }) => {
-    await inTransaction((work) => reviseInstrument(work, actor.memberId, params.id, body));
+  handle: async ({ actor, params, body, ifMatch }) => {
+    await inTransaction((work) => reviseInstrument(work, actor.memberId, params.id, ifMatch, body));
     return { body: { instruments: await instrumentsOf(actor.memberId) } };
   },
 });
 
-export const instrumentRoutes = [listInstrumentsRoute, addInstrumentRoute, reviseInstrumentRoute];
+export const retireInstrumentRoute = defineRoute({
+  operationId: 'retireInstrument',
+  method: 'DELETE',
+  path: '/api/v1/instruments/{id}',
+  summary: 'Takes an instrument out of use; reports keep it.',
+  access: 'member',
+  params: z.object({ id: z.string() }),
+  success: { status: 204, description: 'It is offered no more.', body: null },
+  handle: async ({ actor, params }) => {
+    await inTransaction((work) => retireInstrument(work, actor.memberId, params.id));
+    return {};
+  },
+});
+
+export const instrumentRoutes = [
+  listInstrumentsRoute,
+  addInstrumentRoute,
+  reviseInstrumentRoute,
+  retireInstrumentRoute,
+];

@@ -8,9 +8,10 @@ import { previewFigures } from '../commands/preview-figures';
 import { sendReport } from '../commands/send-report';
 import { withdrawReport } from '../commands/withdraw-report';
 import { methodsInUse } from '../queries/methods';
-import { reportByPublicId, reportsOfMember } from '../queries/reports';
+import { reportsOfMember } from '../queries/report-lists';
+import { reportByPublicId } from '../queries/reports';
 import { reportFigure, reportListItem, reportView, submission } from '../schema';
-import { phase } from '../schema/content';
+import { phase, supply, text } from '../schema/content';
 
 const params = z.object({ id: z.string() });
 
@@ -64,9 +65,10 @@ export const withdrawReportRoute = defineRoute({
   summary: 'Withdraws one’s own report: it counts nowhere any more.',
   access: 'member',
   params,
+  body: z.object({ reason: text(500).nullable().default(null) }),
   success: { status: 204, description: 'It is withdrawn.', body: null },
-  handle: async ({ actor, params: { id } }) => {
-    await withdrawReport(actor, id);
+  handle: async ({ actor, params: { id }, body }) => {
+    await withdrawReport(actor, id, body.reason === '' ? null : body.reason);
     return {};
   },
 });
@@ -107,23 +109,25 @@ export const previewFiguresRoute = defineRoute({
   body: z.object({
     categoryPublicId: z.string(),
     instrumentPublicId: z.string(),
+    methodCode: z.string().nullable().default(null),
+    supplyClass: supply.supplyClass.default('ac-230'),
+    supplyVolts: supply.supplyVolts.default(null),
     phases: z.array(phase).min(1).max(200),
   }),
   success: {
     status: 200,
-    description: 'Figures, and what could not be computed and why.',
+    description: 'Figures, what could not be computed and why, and what the method asks for besides.',
     body: z.object({
       figures: z.array(reportFigure.omit({ id: true, setAside: true, modeName: true })),
       refusals: z.array(z.object({ modeCode: z.string().nullable(), reason: z.string() })),
+      missing: z.array(z.string()),
     }),
   },
   handle: async ({ actor, body }) => {
     const category = await categoryByPublicId(body.categoryPublicId);
     if (!category) throw notFound('category');
     return {
-      body: await inTransaction((work) =>
-        previewFigures(work, actor.memberId, category, body.instrumentPublicId, body.phases),
-      ),
+      body: await inTransaction((work) => previewFigures(work, actor.memberId, category, body)),
     };
   },
 });

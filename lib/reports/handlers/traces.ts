@@ -1,7 +1,5 @@
 import 'server-only';
 import { z } from 'zod';
-import { findCycles } from '@/lib/measurement/phases/cycles';
-import { stretchFigures } from '@/lib/measurement/traces/figures';
 import { traceWindow } from '@/lib/measurement/traces/levels';
 import { AppError } from '@/lib/platform/errors';
 import { fieldProblems } from '@/lib/platform/http/problem';
@@ -9,8 +7,12 @@ import { defineRoute } from '@/lib/platform/http/route';
 import { dropFile } from '@/lib/platform/storage/files';
 import { receiveUpload } from '@/lib/platform/storage/receive-upload';
 import { acceptTrace, readAgain } from '../commands/traces';
+import { maySeeFileName } from '../policy';
+import { accuracyOfMine } from '../queries/instruments';
 import { readSeries, summariseTrace, visibleTrace } from '../queries/traces';
+import { readBand } from '../rules/read-bands';
 import { traceLevel, traceSummary } from '../schema';
+import { bandReading } from '../schema/band';
 import { traceCorrections, traceReading, zoneName } from '../schema/trace';
 
 const MOST_BYTES = 64_000_000;
@@ -47,11 +49,14 @@ export const uploadTraceRoute = defineRoute({
   success: { status: 200, description: 'The trace, or what must be answered first.', body: traceReading },
   handle: async ({ actor, request }) => {
     const upload = await receiveUpload(request, MOST_BYTES);
-    const zone = zoneName.safeParse(upload.fields.zone ?? 'UTC');
-    if (!zone.success)
-      throw new AppError('bad-input', 'The time zone is none that is known. Choose one from the list.');
-    const corrections = traceCorrections.parse(JSON.parse(upload.fields.corrections ?? '{}'));
-    return { body: await acceptTrace(actor.memberId, upload, { zone: zone.data, corrections }) };
+    const options = uploadFields.safeParse(upload.fields);
+    if (!options.success) {
+      await dropFile(upload.path);
+      throw new AppError('bad-input', 'Something beside the file can’t be used as it is; each field says why.', {
+        fields: fieldProblems(options.error),
+      });
+    }
+    return { body: await acceptTrace(actor.memberId, upload, options.data) };
   },
 });
 
@@ -78,55 +83,60 @@ export const getTraceRoute = defineRoute({
   success: { status: 200, description: 'The trace.', body: traceSummary },
   handle: async ({ actor, params: { id } }) => {
     const row = await visibleTrace(actor, id);
-    return { body: { fileName: row.fileName, ...summariseTrace(row) } };
+    return { body: summariseTrace(row, maySeeFileName(actor, row)) };
   },
 });
 
 const seconds = z
   .string()
-  .regex(/^-?\d+(\.\d+)?$/, 'Give seconds as a number.')
+  .regex(/^-?\d{1,12}(\.\d{1,9})?$/, 'Give seconds as a number.')
   .transform(Number);
+const blocks = z
+  .string()
+  .regex(/^\d{1,4}$/, 'Give a whole number up to 4,000.')
+  .transform((text) => Math.min(4000, Math.max(10, Number(text))));
 
 export const getTraceWindowRoute = defineRoute({
   operationId: 'getTraceWindow',
   method: 'GET',
   path: '/api/v1/traces/{id}/window',
-  summary: 'A window of a trace: minimum, maximum and mean of at most so many blocks, and the window’s figures.',
+  summary: 'A window of a trace for drawing: minimum, maximum and mean of at most so many blocks.',
   access: 'anyone',
   params,
-  query: z.object({ from: seconds, to: seconds, blocks: seconds.optional() }),
-  success: {
-    status: 200,
-    description: 'The blocks, and the figures of the window.',
-    body: z.object({
-      level: traceLevel,
-      figures: z
-        .object({
-          countedSeconds: z.number(),
-          coverage: z.number(),
-          energyWattHours: z.number(),
-          meanWatts: z.number(),
-          minimumWatts: z.number(),
-          maximumWatts: z.number(),
-          averagingSeconds: z.number(),
-        })
-        .nullable(),
-      cycles: z.object({ whole: z.int().nullable(), reason: z.string().nullable() }),
-    }),
-  },
+  query: z.object({ from: seconds, to: seconds, blocks: blocks.optional() }),
+  success: { status: 200, description: 'The blocks.', body: z.object({ level: traceLevel }) },
   handle: async ({ actor, params: { id }, query }) => {
     const trace = await readSeries(await visibleTrace(actor, id));
-    const blocks = Math.min(4000, Math.max(10, query.blocks ?? 1000));
-    const cycles = findCycles(trace, query.from, query.to);
-    return {
-      body: {
-        level: traceWindow(trace, query.from, query.to, blocks),
-        figures: stretchFigures(trace, query.from, query.to),
-        cycles: cycles.accepted
-          ? { whole: cycles.cycles.length, reason: null }
-          : { whole: null, reason: cycles.reason },
-      },
-    };
+    return { body: { level: traceWindow(trace, query.from, query.to, query.blocks ?? 1000) } };
+  },
+});
+
+const band = z
+  .object({ fromSeconds: z.number(), toSeconds: z.number() })
+  .refine((given) => given.toSeconds > given.fromSeconds, {
+    path: ['toSeconds'],
+    message: 'The end lies before the start. Move one of the edges.',
+  });
+
+export const readBandsRoute = defineRoute({
+  operationId: 'readBands',
+  method: 'POST',
+  path: '/api/v1/traces/{id}/figures',
+  summary: 'The figures of stretches of a trace, with the uncertainty that one of my instruments leaves.',
+  access: 'anyone',
+  limit: { name: 'band figures', atOnce: 60, perMinute: 120 },
+  params,
+  body: z.object({ bands: z.array(band).min(1).max(50), instrumentPublicId: z.string().nullable().default(null) }),
+  success: {
+    status: 200,
+    description: 'In the order of the stretches.',
+    body: z.object({ bands: z.array(bandReading) }),
+  },
+  handle: async ({ actor, params: { id }, body }) => {
+    const trace = await readSeries(await visibleTrace(actor, id));
+    const accuracy =
+      body.instrumentPublicId && actor ? await accuracyOfMine(actor.memberId, body.instrumentPublicId) : null;
+    return { body: { bands: body.bands.map((one) => readBand(trace, one, accuracy)) } };
   },
 });
 
@@ -158,6 +168,9 @@ export const downloadTraceRoute = defineRoute({
       headers: {
         'content-type': 'text/csv; charset=utf-8; header=present',
         'content-disposition': `attachment; filename="trace-${id}.csv"`,
+        'content-security-policy': "default-src 'none'; sandbox",
+        'cross-origin-resource-policy': 'same-origin',
+        'x-content-type-options': 'nosniff',
       },
     });
   },
@@ -168,5 +181,6 @@ export const traceRoutes = [
   readTraceAgainRoute,
   getTraceRoute,
   getTraceWindowRoute,
+  readBandsRoute,
   downloadTraceRoute,
 ];

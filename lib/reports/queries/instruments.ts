@@ -1,4 +1,5 @@
 import 'server-only';
+import type { StatedAccuracy } from '@/lib/measurement/uncertainty/types';
 import { database } from '@/lib/platform/database/connection';
 import type { Instrument as InstrumentModel } from '@/models/instrument';
 import type { InstrumentRevision } from '@/models/instrument-revision';
@@ -36,4 +37,11 @@ export function toInstrument(row: InstrumentModel, revision: InstrumentRevision)
     averagingSeconds: revision.averagingSeconds,
     calibratedOn: revision.calibratedOn,
   };
+}
+
+/** What a member's own instrument states of its accuracy, or null where there is no such instrument. */
+export async function accuracyOfMine(memberId: number, publicId: string): Promise<StatedAccuracy | null> {
+  const { Instrument: Model, InstrumentRevision: Revision } = database().models;
+  const row = await Model.findOne({ where: { publicId, memberId } });
+  return row?.currentRevisionId ? Revision.findByPk(row.currentRevisionId) : null;
 }

@@ -15,6 +15,7 @@ import { maySeeEvidence, type EvidenceStanding } from '../policy';
 /** What is shown of a trace without its readings. */
 export interface TraceSummary {
   publicId: string;
+  fileName: string;
   kind: Trace['kind'];
   powerKind: Trace['powerKind'];
   samples: number;
@@ -58,22 +59,34 @@ export async function standingOf(
   return row ?? { isPublished: false, isSubmitted: false };
 }
 
+/** Whoever looks through a trace asks for one window after the other; a series never changes, so a few are kept. */
+const recent = new Map<string, Trace>();
+const MOST_RECENT = 4;
+
 /** A trace's readings, from its column file. */
 export async function readSeries(
   row: Pick<TraceRow, 'storedSeries' | 'kind' | 'powerKind' | 'averagingSeconds' | 'step' | 'description'>,
 ): Promise<Trace> {
-  return decodeSeries(await readFile(keptPath(row.storedSeries)), {
-    kind: row.kind,
-    powerKind: row.powerKind,
-    averagingSeconds: row.averagingSeconds,
-    stamp: (row.description as TraceDescription).stamp,
-    step: row.step,
-  });
+  const name = row.storedSeries;
+  const trace =
+    recent.get(name) ??
+    decodeSeries(await readFile(keptPath(name)), {
+      kind: row.kind,
+      powerKind: row.powerKind,
+      averagingSeconds: row.averagingSeconds,
+      stamp: (row.description as TraceDescription).stamp,
+      step: row.step,
+    });
+  recent.delete(name);
+  recent.set(name, trace);
+  for (const oldest of recent.keys()) if (recent.size > MOST_RECENT) recent.delete(oldest);
+  return trace;
 }
 
-export function summariseTrace(row: TraceRow): TraceSummary {
+export function summariseTrace(row: TraceRow, withName: boolean): TraceSummary {
   return {
     publicId: row.publicId,
+    fileName: withName ? row.fileName : `trace-${row.publicId}.csv`,
     kind: row.kind,
     powerKind: row.powerKind,
     samples: row.samples,

@@ -5,6 +5,10 @@ const NUMBER = 'Give a number.';
 export const finite = z.number(NUMBER);
 const time = z.iso.datetime({ offset: true, message: 'Give a date and a time.' });
 export const publicId = z.string().regex(/^[a-z0-9]{10}$/, 'Choose one from the list.');
+/** A megawatt: no household has a device that draws more, so a larger number is another unit. */
+const watts = finite
+  .min(-1e6, 'Check the unit: that is under −1,000 kW.')
+  .max(1e6, 'Check the unit: that is over 1,000 kW.');
 export const text = (most: number) => z.string().trim().max(most, `Shorten this to ${most} characters.`);
 
 export const MEASURING_POINTS = {
@@ -25,6 +29,8 @@ export const PHOTO_KINDS = {
 
 export const keys = <T extends string>(of: Record<T, string>) => Object.keys(of) as [T, ...T[]];
 
+const uses = z.int('Give a whole number.').min(1, 'At least one use.').max(10_000, 'At most 10,000 uses.').nullable();
+
 /** A stretch whose figures were read off a display. */
 export const typedPhase = z
   .object({
@@ -32,11 +38,14 @@ export const typedPhase = z
     modeCode: z.string().min(1, 'Choose the operating mode.'),
     startsAt: time.nullable(),
     durationSeconds: finite.positive('Say how long it lasted.').max(366 * 86_400, 'A year is the longest.'),
-    meanWatts: finite.nullable(),
-    minimumWatts: finite.nullable(),
-    maximumWatts: finite.nullable(),
-    energyWattHours: finite.min(0, 'An energy can’t be negative.').nullable(),
-    uses: z.int('Give a whole number.').min(1, 'At least one use.').nullable(),
+    meanWatts: watts.nullable(),
+    minimumWatts: watts.nullable(),
+    maximumWatts: watts.nullable(),
+    energyWattHours: finite
+      .min(0, 'An energy can’t be negative.')
+      .max(1e9, 'Check the unit: that is over 1,000,000 kWh.')
+      .nullable(),
+    uses,
     note: text(500),
   })
   .superRefine((phase, context) => {
@@ -63,7 +72,7 @@ export const tracedPhase = z
     tracePublicId: publicId,
     fromSeconds: finite,
     toSeconds: finite,
-    uses: z.int('Give a whole number.').min(1, 'At least one use.').nullable(),
+    uses,
     note: text(500),
   })
   .refine((phase) => phase.toSeconds > phase.fromSeconds, {
@@ -79,7 +88,8 @@ export const photoReference = z.object({
   caption: text(300),
 });
 
-const supply = {
+/** How the device was fed and where the instrument sat. */
+export const supply = {
   supplyClass: z.enum(keys(SUPPLY_CLASSES), 'Choose the supply.'),
   supplyVolts: finite.positive('Give the volts, above 0.').max(1000, 'At most 1,000 V.').nullable(),
   hertz: finite.positive('Give the hertz, above 0.').max(1000, 'At most 1,000 Hz.').nullable(),
@@ -106,7 +116,15 @@ export const reportContent = z.object({
 
 /** Where the device comes from: the catalogue, or a proposal that goes live marked as new. */
 export const deviceChoice = z.discriminatedUnion('from', [
-  z.object({ from: z.literal('catalogue'), publicId, variantId: z.int().nullable() }),
+  z.object({
+    from: z.literal('catalogue'),
+    publicId,
+    variantId: z
+      .int()
+      .positive()
+      .max(2 ** 31 - 1)
+      .nullable(),
+  }),
   z.object({ from: z.literal('proposal'), proposal: proposedDevice }),
 ]);
 

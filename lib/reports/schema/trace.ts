@@ -42,7 +42,7 @@ export const traceCorrections: z.ZodType<TraceCorrections> = z.strictObject({
   averagingSeconds: z.number().positive().max(86_400).optional(),
   volts: z.number().positive().max(1000).optional(),
   stepSeconds: z.number().positive().max(86_400).optional(),
-  startsAt: z.string().max(40).optional(),
+  startsAt: z.iso.datetime({ offset: true, message: 'Give a date and a time.' }).optional(),
   turnSign: z.boolean().optional(),
   leaveOutMissing: z.boolean().optional(),
   segment: z.int().min(0).max(1000).optional(),

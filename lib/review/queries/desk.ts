@@ -3,7 +3,8 @@ import { QueryTypes } from 'sequelize';
 import type { Actor } from '@/lib/auth/schema';
 import { database } from '@/lib/platform/database/connection';
 import { notFound } from '@/lib/platform/errors';
-import { reportByPublicId, reportsOfMember } from '@/lib/reports/queries/reports';
+import { reportsOfMember } from '@/lib/reports/queries/report-lists';
+import { reportByPublicId } from '@/lib/reports/queries/reports';
 import { findWarnings, type Peers, type SameFile } from '../rules/warnings';
 import type { Desk } from '../schema';
 

@@ -5,7 +5,7 @@ import type { TextLine } from './lines';
 import { isMissing, readNumber } from './read-number';
 import { readClock, readTime, type ReadTime } from './read-time';
 import { splitRow } from './split-row';
-import type { TraceCorrections, TraceDescription, ValueUnit } from './types';
+import { TraceProblem, type TraceCorrections, type TraceDescription, type ValueUnit } from './types';
 
 /** What a unit is worth in W, VA or Wh. Amperes are multiplied by their voltage besides. */
 export const UNIT_FACTOR: Record<ValueUnit, number> = {
@@ -21,6 +21,12 @@ export const UNIT_FACTOR: Record<ValueUnit, number> = {
 
 const MOST_NAMED = 20;
 const FIRST_ROWS = 8;
+/** Three months at a reading a second. */
+const MOST_ROWS = 8_000_000;
+/** No reading in W or Wh is larger, and sums of larger ones would leave the range of numbers. */
+const LARGEST_READING = 1e12;
+/** 1970 to 2100, in seconds: a time outside is a column that is none. */
+const LATEST_SECONDS = 4_102_444_800;
 
 /** Collects the readings of a file row by row; nothing is kept of a row but its two numbers. */
 export class RowReader {
@@ -48,12 +54,19 @@ export class RowReader {
     if (line.number < this.layout.dataFrom || line.text.trim() === '') return;
     const cells = splitRow(line.text, this.layout.delimiter);
     this.rows += 1;
+    if (this.rows > MOST_ROWS) throw tooManyRows();
     const time = this.readTime(cells);
     const cell = cells[this.plan.valueColumn] ?? '';
     const value = readNumber(cell, this.layout.decimalMark);
     if (this.firstRows.length < FIRST_ROWS) this.remember(line.number, cells, time, value);
     if (time === null)
       return this.refuse(line.number, cells.join(' ').trim() === '' ? 'an empty row' : 'its time can’t be read');
+    if (time.seconds < 0 || time.seconds > LATEST_SECONDS) {
+      return this.refuse(line.number, 'its time lies outside 1970 to 2100');
+    }
+    if (value !== null && Math.abs(value * this.factor) > LARGEST_READING) {
+      return this.refuse(line.number, `“${cell.slice(0, 30)}” is too large to be a reading`);
+    }
     if (value === null || !Number.isFinite(value)) {
       if (!isMissing(cell)) return this.refuse(line.number, `“${cell.slice(0, 30)}” is no number`);
       this.missing.count += 1;
@@ -101,8 +114,17 @@ export class RowReader {
 /** A time as it was read, before its zone: what the member compares with the file. */
 function describeTime({ seconds, kind }: ReadTime): string {
   if (kind === 'relative') return `${seconds} s`;
+  if (!(seconds >= 0 && seconds <= LATEST_SECONDS)) return 'outside 1970 to 2100';
   return new Date(seconds * 1000)
     .toISOString()
     .replace('T', ' ')
     .replace(/\.?0*Z$/, kind === 'utc' ? ' UTC' : '');
+}
+
+function tooManyRows(): TraceProblem {
+  const most = (MOST_ROWS / 1e6).toFixed(0);
+  return new TraceProblem(
+    'too-large',
+    `The file has more than ${most} million rows. Cut it to the days you need, or log at longer steps.`,
+  );
 }

@@ -1,3 +1,4 @@
-import { reviseInstrumentRoute } from '@/lib/reports/handlers/instruments';
+import { retireInstrumentRoute, reviseInstrumentRoute } from '@/lib/reports/handlers/instruments';
 
 export const PUT = reviseInstrumentRoute.handler;
+export const DELETE = retireInstrumentRoute.handler;

@@ -1,0 +1,3 @@
+import { readBandsRoute } from '@/lib/reports/handlers/traces';
+
+export const POST = readBandsRoute.handler;
