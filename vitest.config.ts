@@ -44,6 +44,11 @@ export default defineConfig({
           hookTimeout: 60_000,
         },
       },
+      {
+        ...shared,
+        // What takes minutes: `npm run test:deep`.
+        test: { name: 'deep', include: ['tests/**/*.deep.ts'], environment: 'node', env, fileParallelism: false },
+      },
     ],
     coverage: { provider: 'v8', include: ['lib/measurement/**/*.ts'], reporter: ['text-summary', 'json-summary'] },
   },
