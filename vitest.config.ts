@@ -36,7 +36,7 @@ export default defineConfig({
           include: ['tests/integration/**/*.test.ts'],
           environment: 'node',
           env,
-          setupFiles: ['tests/setup/no-network.ts', 'tests/setup/environment.ts'],
+          setupFiles: ['tests/setup/no-network.ts', 'tests/setup/environment.ts', 'tests/setup/next-cache.ts'],
           globalSetup: ['tests/setup/cluster.ts'],
           // One database a run: files commit, lock and recompute, so they take turns.
           fileParallelism: false,

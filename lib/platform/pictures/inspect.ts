@@ -30,7 +30,7 @@ export function inspectPicture(content: Uint8Array): PictureFacts {
   } catch {
     throw new AppError(
       'unsupported-kind',
-      'The picture’s header can’t be read; the file may be cut off. Save it again as JPEG.',
+      'The picture’s header can’t be read; the file may be cut off. Save it again as JPEG and choose that file.',
     );
   }
   if (size.width * size.height > MOST_PIXELS || size.width < 1 || size.height < 1) {

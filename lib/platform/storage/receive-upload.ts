@@ -31,8 +31,9 @@ export async function receiveUpload(request: Request, mostBytes: number): Promis
   // What says that it is too large need not travel first; the rest of a body is the file's frame.
   const announced = Number(request.headers.get('content-length') ?? 0);
   if (announced > mostBytes + MOST_FRAME) throw tooLarge(mostBytes);
-  const incoming = asIncoming(request);
   const parser = fileParser(await incomingFolder(), mostBytes);
+  // Nothing is awaited from here until the parser listens: what fails in between would never be heard of.
+  const incoming = asIncoming(request);
   // multer removes what it has written of a stream that ends early, and reports only then.
   const cutOff = () => incoming.destroy(new Error('cut off'));
   request.signal.addEventListener('abort', cutOff, { once: true });

@@ -3,6 +3,7 @@ import { database } from '@/lib/platform/database/connection';
 import { sha256 } from '@/lib/platform/ids';
 import { sendReport, type SendOptions } from '@/lib/reports/commands/send-report';
 import { beginDraft } from '@/lib/reports/commands/drafts';
+import { sendReportRoute } from '@/lib/reports/handlers/reports';
 import { canonicalJson } from '@/lib/reports/rules/canonical-json';
 import type { ReportContent } from '@/lib/reports/schema';
 import '@/lib/figures/register';
@@ -20,13 +21,16 @@ import {
   tracedPhase,
   type Sender,
 } from '../../factories/reports';
+import { callRoute } from '../../factories/requests';
 import { resetDatabase } from '../../setup/database';
+import { droppedTags } from '../../setup/next-cache';
 
 let sender: Sender;
 let keys = 0;
 
 beforeEach(async () => {
   await resetDatabase();
+  droppedTags.length = 0;
   const member = await aMember();
   const device = await aDevice(await aCategory());
   sender = { member, device, instrumentPublicId: await anInstrument(member), methodCode: await aMethod() };
@@ -144,6 +148,34 @@ describe('sending a report', () => {
     const { ReportDraft } = database().models;
     expect((await ReportDraft.findOne({ where: { publicId: mine.publicId } }))?.sentAt).not.toBeNull();
     expect((await ReportDraft.findOne({ where: { publicId: other.publicId } }))?.sentAt).toBeNull();
+  });
+});
+
+describe('the API of sending', () => {
+  it('changes nothing by fields that are not the sender’s to set', async () => {
+    const submission = { ...aSubmission(sender), state: 'verified', memberId: 1, createdAt: '2020-01-01T00:00:00Z' };
+    const keysOfOthers = { state: 'verified', publishedRevisionId: 1 };
+    const body = { clientKey: 'setting-much', draftPublicId: null, amendsPublicId: null, submission, ...keysOfOthers };
+    const response = await callRoute(sendReportRoute, { as: sender.member, body });
+    expect(response.status).toBe(201);
+    const { publicId } = (await response.json()) as { publicId: string };
+    const report = await reportOf(publicId);
+    expect(report).toMatchObject({ state: 'submitted', publishedRevisionId: null, memberId: sender.member.id });
+    expect(report.createdAt.getFullYear()).toBeGreaterThan(2020);
+    expect(droppedTags).toEqual([`report:${publicId}`]);
+  });
+
+  it('is for members', async () => {
+    const body = {
+      clientKey: 'from nobody',
+      draftPublicId: null,
+      amendsPublicId: null,
+      submission: aSubmission(sender),
+    };
+    expect((await callRoute(sendReportRoute, { body })).status).toBe(401);
+    const headers = { origin: 'http://elsewhere.example' };
+    expect((await callRoute(sendReportRoute, { as: sender.member, body, headers })).status).toBe(403);
+    expect(await database().models.Report.count()).toBe(0);
   });
 });
 
