@@ -16,11 +16,16 @@ const LOCAL_KEY = 'wattcairn-draft';
 const PAUSE_MS = 1000;
 const RETRY_MS = 5000;
 
-/** What this browser kept of a draft that never reached the server. */
-export function keptHere(draftPublicId: string | null): EditorValues | null {
+/** What this browser kept of a draft that never reached the server, and over which version it was typed. */
+export interface KeptDraft {
+  version: number;
+  values: EditorValues;
+}
+
+export function keptHere(draftPublicId: string | null): KeptDraft | null {
   try {
     const text = localStorage.getItem(`${LOCAL_KEY}-${draftPublicId ?? 'new'}`);
-    return text ? (JSON.parse(text) as EditorValues) : null;
+    return text ? (JSON.parse(text) as KeptDraft) : null;
   } catch {
     return null;
   }
@@ -47,7 +52,8 @@ export class DraftSaver {
   save(values: EditorValues): void {
     this.latest = values;
     try {
-      localStorage.setItem(this.key(), JSON.stringify(values));
+      const kept: KeptDraft = { version: this.draft.version, values };
+      localStorage.setItem(this.key(), JSON.stringify(kept));
     } catch {
       // A full or closed store of this browser: the server's copy has to do.
     }

@@ -21,6 +21,8 @@ export function EditorLoader() {
   // The address changes when a draft begins; the editor that is open must not be made anew by that.
   const [draftId] = useState(parameters.get('draft'));
   const [deviceId] = useState(parameters.get('device'));
+  // Looked at once: the editor itself keeps its text there as one types.
+  const [kept] = useState(() => keptHere(draftId));
   const [usesKept, setUsesKept] = useState<boolean | null>(null);
   const { categories, devices, methods, instruments } = useEditorData();
   const saved = useQuery({
@@ -42,11 +44,12 @@ export function EditorLoader() {
   if (!categories.data || !devices.data || !methods.data || !instruments.data || waiting) {
     return <Skeleton label="Loading the editor" lines={6} />;
   }
-  const kept = keptHere(draftId);
-  if (kept && usesKept === null) {
+  // Typed over the version that is saved: it only goes on. Typed over another one, or for another device: ask.
+  const goesOn = kept !== null && draftId !== null && kept.version === saved.data?.version;
+  if (kept && !goesOn && usesKept === null) {
     return (
       <Notice tone="warning" title="This browser kept something that was never saved">
-        <p>It holds {kept.deviceName || 'a report without a device'}, as you left it. Go on with it?</p>
+        <p>It holds {kept.values.deviceName || 'a report without a device'}, as you left it. Go on with it?</p>
         <p className="mt-2 flex flex-wrap gap-4">
           <Button look="main" onClick={() => setUsesKept(true)}>
             Go on with it
@@ -68,7 +71,7 @@ export function EditorLoader() {
       initial={{
         publicId: draftId,
         version: saved.data?.version ?? 0,
-        values: kept && usesKept ? kept : begun,
+        values: kept && (goesOn || usesKept) ? kept.values : begun,
       }}
       amendsPublicId={null}
     />
