@@ -24,10 +24,10 @@ export class ClonedSite {
   }
 
   start(): void {
-    const env = { ...process.env, HOME: this.home, PORT: new URL(this.origin).port, NODE_ENV: undefined };
-    const [command = '', ...args] = this.user ? ['runuser', '-u', this.user, '--', 'npm', 'start'] : ['npm', 'start'];
+    const [command, args] = this.asTheUser('npm', 'start');
+    const options = { cwd: this.root, env: this.env };
     this.output = '';
-    const npm = spawn(command, args, { cwd: this.root, env, detached: true, stdio: ['ignore', 'pipe', 'pipe'] });
+    const npm = spawn(command, args, { ...options, detached: true, stdio: ['ignore', 'pipe', 'pipe'] });
     for (const stream of [npm.stdout, npm.stderr]) stream.on('data', (part) => (this.output += String(part)));
     this.npm = npm;
   }
@@ -77,9 +77,20 @@ export class ClonedSite {
   }
 
   run(script: string, ...args: string[]): string {
-    const npm = ['npm', 'run', '--silent', script, '--', ...args];
-    const [command = '', ...rest] = this.user ? ['runuser', '-u', this.user, '--', ...npm] : npm;
-    return execFileSync(command, rest, { cwd: this.root, env: { ...process.env, HOME: this.home }, encoding: 'utf8' });
+    const [command, rest] = this.asTheUser('npm', 'run', '--silent', script, '--', ...args);
+    return execFileSync(command, rest, { cwd: this.root, env: this.env, encoding: 'utf8' });
+  }
+
+  private asTheUser(...command: string[]): [string, string[]] {
+    const [program = '', ...args] = this.user ? ['runuser', '-u', this.user, '--', ...command] : command;
+    return [program, args];
+  }
+
+  /** As a fresh terminal has it: nothing of the npm, the test runner or the database that this runs under. */
+  private get env(): NodeJS.ProcessEnv {
+    const ours = /^(npm_|INIT_CWD$|NODE_ENV$|NODE_OPTIONS$|VITEST|TEST$|DATABASE_|NEXT_|TZ$)/i;
+    const kept = Object.entries(process.env).filter(([name]) => !ours.test(name));
+    return { ...Object.fromEntries(kept), HOME: this.home, PORT: new URL(this.origin).port } as NodeJS.ProcessEnv;
   }
 
   get said(): string {

@@ -31,7 +31,7 @@ describe.each(people)('npm start in a clean clone in %s', (_where, home, user) =
   afterAll(async () => {
     await site?.interrupt().catch(() => {});
     site?.destroy();
-  });
+  }, 120_000);
 
   it('reaches the site though it was killed in each of its steps', async () => {
     site = new ClonedSite(home, user, await freePort());
