@@ -27,8 +27,9 @@ export function takeToken(limit: Limit, who: string): void {
   const name = `${limit.name} ${who}`;
   const time = now().getTime();
   const bucket = buckets.get(name) ?? { tokens: limit.atOnce, at: time };
-  const refilled = bucket.tokens + ((time - bucket.at) / 60_000) * limit.perMinute;
-  const tokens = Math.min(limit.atOnce, Math.max(0, refilled));
+  // A clock that was set back takes nothing away.
+  const minutes = Math.max(0, time - bucket.at) / 60_000;
+  const tokens = Math.min(limit.atOnce, bucket.tokens + minutes * limit.perMinute);
   // Re-inserting keeps the map in order of use, so that the oldest bucket is the first to go.
   buckets.delete(name);
   buckets.set(name, { tokens: tokens >= 1 ? tokens - 1 : tokens, at: time });
