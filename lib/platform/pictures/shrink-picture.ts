@@ -17,7 +17,7 @@ export interface ShrunkSizes {
 }
 
 /** 24 megapixels take some 900 MB and ten seconds on a small machine. */
-const MOST_MEMORY_KB = 2_000_000;
+const MOST_ADDRESS_KB = 2_000_000;
 const MOST_MS = 60_000;
 
 const takeTurn = oneAtATime(12);
@@ -34,7 +34,7 @@ export function shrinkPicture(input: string, large: string, small: string): Prom
   return takeTurn(async () => {
     try {
       const args = [worker, input, large, small];
-      return JSON.parse(await runLimited({ args, mostMemoryKb: MOST_MEMORY_KB, mostMs: MOST_MS })) as ShrunkSizes;
+      return JSON.parse(await runLimited({ args, mostAddressKb: MOST_ADDRESS_KB, mostMs: MOST_MS })) as ShrunkSizes;
     } catch (error) {
       log().warn({ reason: (error as Error).message }, 'a picture could not be decoded');
       const message =
