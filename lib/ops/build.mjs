@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import { run, say } from './console.mjs';
+import { run, say, StartError } from './console.mjs';
 
 const SOURCES = ['app', 'components', 'lib', 'models', 'public', 'seeders'];
 const FILES = [
@@ -32,6 +32,11 @@ export async function ensureBuild(root, env) {
     cwd: root,
     env: { ...env, NODE_ENV: 'production' },
     quiet: true,
+  }).catch((error) => {
+    if (!(error instanceof StartError)) throw error;
+    throw new StartError(
+      `The application could not be built. What the build said, with the file and line:\n${error.message}`,
+    );
   });
   writeFileSync(mark, now);
 }

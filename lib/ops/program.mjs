@@ -1,5 +1,5 @@
 import path from 'node:path';
-import { endOnSignals, explain, run, StartError, TYPESCRIPT } from './console.mjs';
+import { endOnSignals, explain, run, say, StartError, TYPESCRIPT } from './console.mjs';
 import { ensureDependencies } from './packages.mjs';
 import { runningStart } from './turn.mjs';
 
@@ -21,6 +21,9 @@ try {
   const { env, cluster } = await prepareEnvironment(root);
   try {
     await run(process.execPath, [...TYPESCRIPT, path.join(root, 'lib/ops', file), ...args], { env });
+    if (file === 'recompute.ts' && !args.includes('--check') && runningStart(root)) {
+      say('The site that runs shows the pages it keeps until it is started again.');
+    }
   } finally {
     // A start that came meanwhile has adopted it.
     if (cluster && !cluster.adopted && !runningStart(root)) await cluster.stop();

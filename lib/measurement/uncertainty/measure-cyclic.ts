@@ -32,8 +32,8 @@ export function measureCyclic(stretch: TraceStretch, accuracy: StatedAccuracy): 
   const finding = findCycles(trace, fromSeconds, toSeconds);
   if (!finding.accepted) return finding;
   const coverage = stretchFigures(trace, fromSeconds, toSeconds)?.coverage ?? null;
+  const limit = accuracy.lowerLimitWatts ?? 0;
   const figure = (value: number, seconds: number, repeatability: number): MeasuredFigure => {
-    const limit = accuracy.lowerLimitWatts ?? 0;
     const parts: UncertaintyParts = {
       ...instrumentUncertainty(accuracy, value),
       resolution: resolutionUncertainty(stepWatts(trace, accuracy), accuracy.counts),
@@ -56,7 +56,6 @@ export function measureCyclic(stretch: TraceStretch, accuracy: StatedAccuracy): 
   const covered = finding.running.seconds + finding.between.seconds;
   const mean = figure(finding.meanWatts, covered, cyclicRepeatability(finding.cycles));
   // Between cycles a plug-in meter often reads nothing: what it can't see may be there all the same.
-  const limit = accuracy.lowerLimitWatts ?? 0;
   if (finding.between.meanWatts < limit) {
     mean.parts.belowLimit = ((1 - finding.dutyCycle) * limit) / Math.sqrt(3);
     mean.standardUncertainty = combineParts(mean.parts);
@@ -64,16 +63,20 @@ export function measureCyclic(stretch: TraceStretch, accuracy: StatedAccuracy): 
   return {
     accepted: true,
     finding,
-    dayEnergy: {
-      ...mean,
-      quantity: 'day-energy',
-      value: mean.value * HOURS_A_DAY,
-      standardUncertainty: mean.standardUncertainty * HOURS_A_DAY,
-      parts: scaleParts(mean.parts, HOURS_A_DAY),
-      censoredAt: null,
-    },
+    dayEnergy: overADay(mean),
     running: figure(finding.running.meanWatts, finding.running.seconds, partRepeatability(finding.cycles, 'on')),
     between: figure(finding.between.meanWatts, finding.between.seconds, partRepeatability(finding.cycles, 'off')),
+  };
+}
+
+function overADay(mean: MeasuredFigure): MeasuredFigure {
+  return {
+    ...mean,
+    quantity: 'day-energy',
+    value: mean.value * HOURS_A_DAY,
+    standardUncertainty: mean.standardUncertainty * HOURS_A_DAY,
+    parts: scaleParts(mean.parts, HOURS_A_DAY),
+    censoredAt: null,
   };
 }
 

@@ -87,10 +87,10 @@ export class ClonedSite {
   }
 
   /** As a fresh terminal has it: nothing of the npm, the test runner or the database that this runs under. */
-  private get env(): NodeJS.ProcessEnv {
+  private get env() {
     const ours = /^(npm_|INIT_CWD$|NODE_ENV$|NODE_OPTIONS$|VITEST|TEST$|DATABASE_|NEXT_|TZ$)/i;
     const kept = Object.entries(process.env).filter(([name]) => !ours.test(name));
-    return { ...Object.fromEntries(kept), HOME: this.home, PORT: new URL(this.origin).port } as NodeJS.ProcessEnv;
+    return { ...Object.fromEntries(kept), HOME: this.home, PORT: new URL(this.origin).port };
   }
 
   get said(): string {

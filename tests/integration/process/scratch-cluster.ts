@@ -63,6 +63,8 @@ export class ScratchCluster {
 /** One statement on a connection of its own. */
 export async function ask(url: string, statement: string): Promise<Record<string, unknown>[]> {
   const client = new pg.Client(url);
+  // A server that is killed says so on the idle connection too, beside the statement's own failure.
+  client.on('error', () => {});
   await client.connect();
   try {
     return (await client.query<Record<string, unknown>>(statement)).rows;
