@@ -1,13 +1,6 @@
-import { quantileType7 } from '../statistics/quantile-type-7';
+import { weightedPercentiles } from '../traces/weighted-percentiles';
+import { absorbShort, type Run } from './absorb-short';
 import { otsuThreshold } from './otsu';
-
-/** Readings from first to end (half open) that are all on or all off, and how long they count. */
-export interface Run {
-  on: boolean;
-  first: number;
-  end: number;
-  seconds: number;
-}
 
 export interface OnOff {
   onWatts: number;
@@ -19,16 +12,18 @@ export interface OnOff {
  * Parts a stretch into runs of on and off: Otsu's threshold, then the middle between the medians below and above it,
  * with a hysteresis of ±25 % of (on − off). Runs shorter than the least are absorbed by their neighbours, shortest first.
  *
- * @param watts, seconds of one length; already smoothed where the logger is quick.
+ * @param watts already smoothed where the logger is quick.
+ * @param weights seconds that each stands for, of the same length; the medians too are weighted by time.
  * @returns null where there is only one level.
+ * @example findOnOffRuns(Float64Array.of(2, 2, 80, 80), Float64Array.of(60, 60, 60, 60), 30)?.onWatts // 80
  */
-export function findOnOffRuns(watts: Float64Array, seconds: Float64Array, leastSeconds: number): OnOff | null {
-  const first = otsuThreshold(watts, seconds);
-  if (first === null) return null;
-  const off = quantileType7(watts.filter((value) => value < first).sort(), 0.5);
-  const on = quantileType7(watts.filter((value) => value >= first).sort(), 0.5);
-  const middle = (on + off) / 2;
-  const slack = 0.25 * (on - off);
+export function findOnOffRuns(watts: Float64Array, weights: Float64Array, leastSeconds: number): OnOff | null {
+  const threshold = otsuThreshold(watts, weights);
+  if (threshold === null) return null;
+  const offWatts = medianWhere(watts, weights, (value) => value < threshold);
+  const onWatts = medianWhere(watts, weights, (value) => value >= threshold);
+  const middle = (onWatts + offWatts) / 2;
+  const slack = 0.25 * (onWatts - offWatts);
   const runs: Run[] = [];
   let state = (watts[0] as number) >= middle;
   for (let i = 0; i < watts.length; i += 1) {
@@ -37,33 +32,15 @@ export function findOnOffRuns(watts: Float64Array, seconds: Float64Array, leastS
     const last = runs[runs.length - 1];
     if (last && last.on === state) {
       last.end = i + 1;
-      last.seconds += seconds[i] as number;
+      last.seconds += weights[i] as number;
     } else {
-      runs.push({ on: state, first: i, end: i + 1, seconds: seconds[i] as number });
+      runs.push({ on: state, first: i, end: i + 1, seconds: weights[i] as number });
     }
   }
-  return { onWatts: on, offWatts: off, runs: absorbShort(runs, leastSeconds) };
+  return { onWatts, offWatts, runs: absorbShort(runs, leastSeconds) };
 }
 
-/** Joins what is too short with both its neighbours, the shortest first. */
-function absorbShort(runs: Run[], leastSeconds: number): Run[] {
-  const kept = [...runs];
-  for (;;) {
-    let shortest = -1;
-    for (let i = 0; i < kept.length; i += 1) {
-      const seconds = (kept[i] as Run).seconds;
-      if (seconds < leastSeconds && (shortest < 0 || seconds < (kept[shortest] as Run).seconds)) shortest = i;
-    }
-    if (shortest < 0 || kept.length < 2) return kept;
-    const from = Math.max(0, shortest - 1);
-    const to = Math.min(kept.length, shortest + 2);
-    const joined = kept.slice(from, to);
-    const host = joined[0] === kept[shortest] ? (joined[1] as Run) : (joined[0] as Run);
-    kept.splice(from, to - from, {
-      on: host.on,
-      first: (joined[0] as Run).first,
-      end: (joined[joined.length - 1] as Run).end,
-      seconds: joined.reduce((sum, run) => sum + run.seconds, 0),
-    });
-  }
+function medianWhere(watts: Float64Array, weights: Float64Array, isKept: (watts: number) => boolean): number {
+  const ofKept = weights.map((weight, i) => (isKept(watts[i] as number) ? weight : 0));
+  return weightedPercentiles(watts, ofKept, [0.5])[0] as number;
 }

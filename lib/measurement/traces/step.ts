@@ -23,6 +23,9 @@ export function medianStepSeconds(trace: Trace): number {
 /**
  * A step longer than this is a gap: neither its time nor its energy counts. A silence of a logger that writes changes
  * only is no gap, and a counter has none in its energy.
+ *
+ * @returns seconds: max(10 dt, 60 s) for samples, 2.5 dt for averages, otherwise Infinity.
+ * @example gapLimitSeconds(samples at 1 s) // 60
  */
 export function gapLimitSeconds(trace: Trace): number {
   const dt = medianStepSeconds(trace);
@@ -30,9 +33,15 @@ export function gapLimitSeconds(trace: Trace): number {
     case 'samples':
       return Math.max(10 * dt, 60);
     case 'averages':
-      return 2.5 * (trace.averagingSeconds ?? dt);
+      return 2.5 * dt;
     case 'changes':
     case 'counter':
       return Infinity;
   }
+}
+
+/** Over which interval a reading averages (s); 0 for what is read in an instant. */
+export function averagingOf(trace: Trace): number {
+  if (trace.kind === 'averages') return trace.averagingSeconds ?? medianStepSeconds(trace);
+  return trace.kind === 'counter' ? medianStepSeconds(trace) : 0;
 }

@@ -1,113 +1,51 @@
-import { gapLimitSeconds, medianStepSeconds } from './step';
+import { countCells } from './count-cells';
+import { countSamples } from './count-samples';
+import { medianStepSeconds } from './step';
 import type { Trace } from './trace';
 
-/** What a stretch of a trace is summed over: one entry a reading. */
+/** What a stretch of a trace is summed over: one entry a reading, all columns of one length. Not to be written to. */
 export interface CountedSteps {
-  /** W (or VA) that reading i stands for. */
+  /** Seconds at which what an entry stands for begins: a sample's own time, an interval's start. */
+  starts: Float64Array;
+  /** W (or VA). */
   watts: Float64Array;
-  /** Seconds that reading i's energy counts over. */
+  /** Seconds that count from an entry's start on: to the next sample, or to the interval's end. */
   seconds: Float64Array;
   /** J of those seconds. */
   joules: Float64Array;
-  /** Seconds that reading i weighs in a percentile: half of each counted neighbouring step for samples. */
+  /** Seconds that an entry's power stands for: half of each counted neighbouring step for samples. */
   weights: Float64Array;
+  /** Entries from first to end (half open) are readings; what stands outside was interpolated at the stretch's edges. */
+  readings: { first: number; end: number };
+  /** Where the power is not known. Only a counter's time and energy count there. */
   gaps: { fromSeconds: number; toSeconds: number }[];
-}
-
-/** The readings of a trace with from ≤ time ≤ to, as a half-open range of indices. */
-export function indexRange(trace: Trace, fromSeconds: number, toSeconds: number): { first: number; end: number } {
-  return { first: lowerBound(trace.timeSeconds, fromSeconds), end: upperBound(trace.timeSeconds, toSeconds) };
+  /** Entries that follow on a gap, rising: nothing may be summed across them that must be seamless. */
+  breaks: number[];
+  /** The stretch, clipped to what the trace covers. */
+  fromSeconds: number;
+  toSeconds: number;
 }
 
 /**
- * What counts between two readings, by the trace's kind: the trapezoid of samples, value times interval of averages,
- * a held value of changes, the difference of a counter. Steps across a gap count nothing; of an average that follows a
- * gap its own averaging time counts.
+ * What counts of a stretch, by the trace's kind: the trapezoid of samples, value times interval of averages, a held
+ * value of changes, the difference of a counter. Where an edge of the stretch falls between two readings, the part
+ * inside counts, so that the parts of a divided stretch add up to it wherever it is divided.
  *
- * @param first, end a range of indices with at least one reading.
+ * The interval of the very first average (or, with starting times, of the last) lies outside the trace's times and
+ * belongs to every stretch that reaches to that reading.
+ * @returns null where the stretch lies outside the trace or has no length.
+ * @example countStretch(samples of 10 W at 0, 10 and 20 s, 5, 20)?.seconds // 5, 10, 0
  */
-export function countSteps(trace: Trace, first: number, end: number): CountedSteps {
-  const n = end - first;
-  const out: CountedSteps = {
-    watts: new Float64Array(n),
-    seconds: new Float64Array(n),
-    joules: new Float64Array(n),
-    weights: new Float64Array(n),
-    gaps: [],
+export function countStretch(trace: Trace, fromSeconds: number, toSeconds: number): CountedSteps | null {
+  const { kind, stamp, timeSeconds: times } = trace;
+  const own = kind === 'averages' ? medianStepSeconds(trace) : 0;
+  const first = times[0] as number;
+  const last = times[times.length - 1] as number;
+  const reach = {
+    fromSeconds: fromSeconds <= first ? first - (stamp === 'end' ? own : 0) : fromSeconds,
+    toSeconds: toSeconds >= last ? last + (stamp === 'start' ? own : 0) : toSeconds,
   };
-  if (trace.kind === 'averages') countAverages(trace, first, n, out);
-  else countBetween(trace, first, n, out);
-  return out;
-}
-
-function countAverages(trace: Trace, first: number, n: number, out: CountedSteps): void {
-  const { timeSeconds: times, values, stamp } = trace;
-  const own = trace.averagingSeconds ?? medianStepSeconds(trace);
-  const limit = gapLimitSeconds(trace);
-  for (let i = 0; i < n; i += 1) {
-    const at = first + i;
-    const neighbour = stamp === 'end' ? at - 1 : at + 1;
-    const inside = neighbour >= first && neighbour < first + n;
-    const step = inside ? Math.abs((times[at] as number) - (times[neighbour] as number)) : own;
-    const seconds = step > limit ? own : step;
-    if (step > limit) {
-      const edge = Math.min(at, neighbour);
-      out.gaps.push({ fromSeconds: times[edge] as number, toSeconds: times[edge + 1] as number });
-    }
-    out.watts[i] = values[at] as number;
-    out.seconds[i] = seconds;
-    out.joules[i] = (values[at] as number) * seconds;
-    out.weights[i] = seconds;
-  }
-}
-
-function countBetween(trace: Trace, first: number, n: number, out: CountedSteps): void {
-  const { timeSeconds: times, values, kind } = trace;
-  const limit = gapLimitSeconds(trace);
-  for (let i = 0; i < n; i += 1) out.watts[i] = kind === 'counter' ? 0 : (values[first + i] as number);
-  for (let i = 1; i < n; i += 1) {
-    const at = first + i;
-    const step = (times[at] as number) - (times[at - 1] as number);
-    if (step > limit) {
-      out.gaps.push({ fromSeconds: times[at - 1] as number, toSeconds: times[at] as number });
-      continue;
-    }
-    out.seconds[i] = step;
-    if (kind === 'samples') {
-      out.joules[i] = (((values[at - 1] as number) + (values[at] as number)) / 2) * step;
-      out.weights[i - 1] = (out.weights[i - 1] as number) + step / 2;
-      out.weights[i] = step / 2;
-    } else if (kind === 'changes') {
-      out.joules[i] = (values[at - 1] as number) * step;
-      out.weights[i - 1] = step;
-    } else {
-      out.joules[i] = ((values[at] as number) - (values[at - 1] as number)) * 3600;
-      out.watts[i] = (out.joules[i] as number) / step;
-      out.weights[i] = step;
-    }
-  }
-  // The first reading of a counter only opens its first interval: it has no power of its own.
-  if (kind === 'counter' && n > 1) out.watts[0] = out.watts[1] as number;
-}
-
-function lowerBound(sorted: Float64Array, value: number): number {
-  let low = 0;
-  let high = sorted.length;
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if ((sorted[middle] as number) < value) low = middle + 1;
-    else high = middle;
-  }
-  return low;
-}
-
-function upperBound(sorted: Float64Array, value: number): number {
-  let low = 0;
-  let high = sorted.length;
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if ((sorted[middle] as number) <= value) low = middle + 1;
-    else high = middle;
-  }
-  return low;
+  // A stretch beside the trace would otherwise be drawn to its nearer end.
+  if (toSeconds < first || fromSeconds > last || !(reach.toSeconds > reach.fromSeconds)) return null;
+  return kind === 'samples' ? countSamples(trace, reach) : countCells(trace, reach);
 }

@@ -1,18 +1,20 @@
-import { findCycles, type Cycle, type CycleFinding } from '../phases/cycles';
+import { findCycles, type AcceptedCycles } from '../phases/cycles';
+import type { Cycle } from '../phases/whole-cycles';
 import { standardDeviation } from '../statistics/standard-deviation';
 import { stretchFigures } from '../traces/figures';
 import { combineParts, scaleParts } from './combine';
 import { driftUncertainty } from './drift';
-import { stepWatts, type TraceStretch } from './measure-mean';
+import { belowLimitUncertainty, shareBelowLimit } from './below-limit';
 import { cyclicRepeatability } from './repeatability';
-import { instrumentUncertainty, resolutionUncertainty } from './stated-accuracy';
+import { instrumentUncertainty } from './stated-accuracy';
+import { meanResolution, powerKindOf, type TraceStretch } from './trace-stretch';
 import type { MeasuredFigure, StatedAccuracy, UncertaintyParts } from './types';
 
 /** What a stretch of a thermostat yields, or why it yields no energy of a day. */
 export type CyclicMeasurement =
   | {
       accepted: true;
-      finding: Extract<CycleFinding, { accepted: true }>;
+      finding: AcceptedCycles;
       dayEnergy: MeasuredFigure;
       running: MeasuredFigure;
       between: MeasuredFigure;
@@ -36,14 +38,14 @@ export function measureCyclic(stretch: TraceStretch, accuracy: StatedAccuracy): 
   const figure = (value: number, seconds: number, repeatability: number): MeasuredFigure => {
     const parts: UncertaintyParts = {
       ...instrumentUncertainty(accuracy, value),
-      resolution: resolutionUncertainty(stepWatts(trace, accuracy), accuracy.counts),
+      resolution: meanResolution(trace, accuracy, seconds, 1),
       repeatability,
       drift: driftUncertainty(value, seconds),
       belowLimit: 0,
     };
     return {
       quantity: 'mean-power',
-      powerKind: trace.powerKind === 'real' && accuracy.readsTruePower ? 'real' : 'apparent',
+      powerKind: powerKindOf(trace, accuracy),
       value,
       standardUncertainty: combineParts(parts),
       parts,
@@ -56,10 +58,9 @@ export function measureCyclic(stretch: TraceStretch, accuracy: StatedAccuracy): 
   const covered = finding.running.seconds + finding.between.seconds;
   const mean = figure(finding.meanWatts, covered, cyclicRepeatability(finding.cycles));
   // Between cycles a plug-in meter often reads nothing: what it can't see may be there all the same.
-  if (finding.between.meanWatts < limit) {
-    mean.parts.belowLimit = ((1 - finding.dutyCycle) * limit) / Math.sqrt(3);
-    mean.standardUncertainty = combineParts(mean.parts);
-  }
+  const limit = accuracy.lowerLimitWatts ?? 0;
+  mean.parts.belowLimit = belowLimitUncertainty(shareBelowLimit([stretch], limit), limit);
+  mean.standardUncertainty = combineParts(mean.parts);
   return {
     accepted: true,
     finding,

@@ -1,8 +1,8 @@
 import { highestMean } from '../traces/highest-mean';
-import { medianStepSeconds } from '../traces/step';
+import { averagingOf, medianStepSeconds } from '../traces/step';
 import { combineParts } from './combine';
-import { stepWatts, type TraceStretch } from './measure-mean';
-import { instrumentUncertainty, resolutionUncertainty } from './stated-accuracy';
+import { instrumentUncertainty } from './stated-accuracy';
+import { meanResolution, powerKindOf, type TraceStretch } from './trace-stretch';
 import type { MeasuredFigure, StatedAccuracy, UncertaintyParts } from './types';
 
 const WINDOW_SECONDS = 10;
@@ -21,7 +21,7 @@ export function measureMaximum(stretches: readonly TraceStretch[], accuracy: Sta
   let seconds = 0;
   for (const stretch of stretches) {
     const { trace, fromSeconds, toSeconds } = stretch;
-    if (medianStepSeconds(trace) > SLOWEST_STEP_SECONDS) continue;
+    if (Math.max(medianStepSeconds(trace), averagingOf(trace)) > SLOWEST_STEP_SECONDS) continue;
     const value = highestMean(trace, fromSeconds, toSeconds, WINDOW_SECONDS);
     if (value === null) continue;
     seconds += toSeconds - fromSeconds;
@@ -31,14 +31,14 @@ export function measureMaximum(stretches: readonly TraceStretch[], accuracy: Sta
   const { value, stretch } = highest;
   const parts: UncertaintyParts = {
     ...instrumentUncertainty(accuracy, value),
-    resolution: resolutionUncertainty(stepWatts(stretch.trace, accuracy), accuracy.counts),
+    resolution: meanResolution(stretch.trace, accuracy, WINDOW_SECONDS, 1),
     repeatability: 0,
     drift: 0,
     belowLimit: 0,
   };
   return {
     quantity: 'maximum-power',
-    powerKind: stretch.trace.powerKind === 'real' && accuracy.readsTruePower ? 'real' : 'apparent',
+    powerKind: powerKindOf(stretch.trace, accuracy),
     value,
     standardUncertainty: combineParts(parts),
     parts,

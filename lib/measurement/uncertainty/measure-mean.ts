@@ -1,27 +1,22 @@
 import { compensatedSum } from '../statistics/compensated-sum';
-import { averagingOf, stretchFigures } from '../traces/figures';
-import { medianStepSeconds } from '../traces/step';
-import { countSteps, indexRange } from '../traces/steps';
-import type { Trace } from '../traces/trace';
+import { stretchFigures } from '../traces/figures';
+import { countStretch } from '../traces/steps';
+import { belowLimitUncertainty, shareBelowLimit } from './below-limit';
 import { combineParts } from './combine';
 import { driftUncertainty } from './drift';
 import { steadyRepeatability } from './repeatability';
-import { instrumentUncertainty, resolutionUncertainty } from './stated-accuracy';
+import { instrumentUncertainty } from './stated-accuracy';
+import { meanResolution, powerKindOf, type TraceStretch } from './trace-stretch';
 import type { MeasuredFigure, StatedAccuracy, UncertaintyParts } from './types';
 
-/** A stretch of a trace. */
-export interface TraceStretch {
-  trace: Trace;
-  fromSeconds: number;
-  toSeconds: number;
-}
+export type { TraceStretch } from './trace-stretch';
 
 /**
  * The mean power over stretches of one mode: summed energy over summed time, with its uncertainty. Below the
  * instrument's lower limit it is censored: at most the limit, neither zero nor the limit itself.
  *
  * Source: JCGM 100:2008 (GUM), 4.3 and 5.1.
- * @param stretches one or more.
+ * @param stretches one or more, of one kind of power and one instrument.
  * @returns null where no time counts in any of them.
  * @example measureMeanPower([a steady hour of 43 W], accuracy)?.value // 43
  */
@@ -32,64 +27,48 @@ export function measureMeanPower(stretches: readonly TraceStretch[], accuracy: S
   });
   const [one] = found;
   if (!one) return null;
+  const { trace } = one.stretch;
   const countedSeconds = compensatedSum(found.map(({ figures }) => figures.countedSeconds));
   const wattHours = compensatedSum(found.map(({ figures }) => figures.energyWattHours));
+  const recordedSeconds = compensatedSum(found.map(({ figures }) => figures.countedSeconds / figures.coverage));
   const value = (wattHours * 3600) / countedSeconds;
+  const limit = accuracy.lowerLimitWatts ?? 0;
+  const { watts, weights } = concatenate(stretches);
   const parts: UncertaintyParts = {
     ...instrumentUncertainty(accuracy, value),
-    resolution: resolutionUncertainty(stepWatts(one.stretch.trace, accuracy), accuracy.counts),
-    repeatability: steadyRepeatability(concatenate(stretches)),
+    resolution: meanResolution(trace, accuracy, countedSeconds, found.length),
+    repeatability: steadyRepeatability(watts, weights),
     drift: driftUncertainty(value, countedSeconds),
-    belowLimit: 0,
+    belowLimit: belowLimitUncertainty(shareBelowLimit(stretches, limit), limit),
   };
-  const limit = accuracy.lowerLimitWatts ?? 0;
-  parts.belowLimit = (shareBelow(stretches, limit) * limit) / Math.sqrt(3);
-  const recorded = compensatedSum(found.map(({ figures }) => figures.countedSeconds / figures.coverage));
   return {
     quantity: 'mean-power',
-    powerKind: one.stretch.trace.powerKind === 'real' && accuracy.readsTruePower ? 'real' : 'apparent',
+    powerKind: powerKindOf(trace, accuracy),
     value,
     standardUncertainty: combineParts(parts),
     parts,
     censoredAt: limit > 0 && Math.abs(value) < limit ? limit : null,
     averagingSeconds: countedSeconds,
-    coverage: Math.min(1, countedSeconds / recorded),
+    coverage: Math.min(1, countedSeconds / recordedSeconds),
     countedSeconds,
   };
 }
 
-/** The step of a trace's power in W: its own or the instrument's, whichever is coarser. */
-export function stepWatts(trace: Trace, accuracy: Pick<StatedAccuracy, 'resolutionWatts'>): number {
-  const own = trace.kind === 'counter' ? (trace.step * 3600) / medianStepSeconds(trace) : trace.step;
-  // What was averaged over many display steps has a finer step of its own; a logger's averages keep the display's.
-  return averagingOf(trace) > 0 ? own : Math.max(own, accuracy.resolutionWatts);
-}
-
-function concatenate(stretches: readonly TraceStretch[]): Float64Array {
-  const columns = stretches.map(({ trace, fromSeconds, toSeconds }) => {
-    const { first, end } = indexRange(trace, fromSeconds, toSeconds);
-    return countSteps(trace, first, end).watts;
+/** The readings of all stretches, one after the other, as far as time counts for them. */
+function concatenate(stretches: readonly TraceStretch[]): { watts: Float64Array; weights: Float64Array } {
+  const all = stretches.flatMap(({ trace, fromSeconds, toSeconds }) => {
+    return countStretch(trace, fromSeconds, toSeconds) ?? [];
   });
-  const all = new Float64Array(columns.reduce((sum, column) => sum + column.length, 0));
+  const [one] = all;
+  if (one && all.length === 1) return one;
+  const size = all.reduce((sum, steps) => sum + steps.watts.length, 0);
+  const watts = new Float64Array(size);
+  const weights = new Float64Array(size);
   let at = 0;
-  for (const column of columns) {
-    all.set(column, at);
-    at += column.length;
+  for (const steps of all) {
+    watts.set(steps.watts, at);
+    weights.set(steps.weights, at);
+    at += steps.watts.length;
   }
-  return all;
-}
-
-function shareBelow(stretches: readonly TraceStretch[], limit: number): number {
-  if (limit === 0) return 0;
-  let below = 0;
-  let total = 0;
-  for (const { trace, fromSeconds, toSeconds } of stretches) {
-    const { first, end } = indexRange(trace, fromSeconds, toSeconds);
-    const { watts, weights } = countSteps(trace, first, end);
-    for (let i = 0; i < watts.length; i += 1) {
-      total += weights[i] as number;
-      if (Math.abs(watts[i] as number) < limit) below += weights[i] as number;
-    }
-  }
-  return total > 0 ? below / total : 0;
+  return { watts, weights };
 }

@@ -1,7 +1,9 @@
 import type { Quantity } from '../units/quantity';
 import { combineParts, scaleParts } from './combine';
 import { driftUncertainty } from './drift';
+import { spotRepeatability } from './repeatability';
 import { instrumentUncertainty, resolutionUncertainty } from './stated-accuracy';
+import { counterStepUncertainty } from './trace-stretch';
 import type { MeasuredFigure, StatedAccuracy, UncertaintyParts } from './types';
 
 /** A stretch as it was read off a display. */
@@ -28,15 +30,15 @@ export function measureTypedMean(stretch: TypedStretch, accuracy: StatedAccuracy
   const value = energyWattHours === null ? meanWatts : energyWattHours / hours;
   if (value === null) return null;
   const counterStep = accuracy.resolutionWattHours ?? 0;
-  const spread = minimumWatts === null || maximumWatts === null ? 0 : maximumWatts - minimumWatts;
+  const spread = minimumWatts === null || maximumWatts === null ? 0 : spotRepeatability([minimumWatts, maximumWatts]);
   const parts: UncertaintyParts = {
     ...instrumentUncertainty(accuracy, value),
     resolution:
       energyWattHours === null
-        ? resolutionUncertainty(accuracy.resolutionWatts, accuracy.counts)
-        : counterStep / Math.sqrt(6) / hours,
+        ? resolutionUncertainty(accuracy.resolutionWatts, accuracy)
+        : counterStepUncertainty(counterStep) / hours,
     // An energy is the mean of all that was drawn: minimum and maximum say nothing about how it repeats.
-    repeatability: energyWattHours === null ? spread / Math.sqrt(12) : 0,
+    repeatability: energyWattHours === null ? spread : 0,
     drift: driftUncertainty(value, durationSeconds),
     belowLimit: 0,
   };

@@ -1,18 +1,16 @@
 import { compensatedSum } from '../statistics/compensated-sum';
-import { standardDeviation } from '../statistics/standard-deviation';
-import { studentTQuantile } from '../statistics/student-t';
 import { stretchFigures } from '../traces/figures';
+import { belowLimitUncertainty, shareBelowLimit } from './below-limit';
 import { combineParts } from './combine';
-import { stepWatts, type TraceStretch } from './measure-mean';
+import { driftUncertainty } from './drift';
+import { repeatedReadings } from './repeatability';
 import { instrumentUncertainty } from './stated-accuracy';
+import { meanResolution, powerKindOf, type TraceStretch } from './trace-stretch';
 import type { MeasuredFigure, StatedAccuracy, UncertaintyParts } from './types';
-
-/** Half the width that 95 % of a normal distribution has in standard deviations: turns t into a standard uncertainty. */
-const NORMAL_95 = 1.959963984540054;
 
 /**
  * The energy of a use, over the whole of each use, with its uncertainty. Several uses give the repeatability
- * t · s/√n; of a single one nothing is known, and the drift of the recording stands in.
+ * t · s/√n; of a single one nothing is known of how it repeats.
  *
  * Source: JCGM 100:2008 (GUM), 4.2 and G.3 (Student's t: 12.7, 4.3, 2.8 at n = 2, 3, 5).
  * @param stretches each one whole use, one or more.
@@ -29,19 +27,20 @@ export function measureUseEnergy(stretches: readonly TraceStretch[], accuracy: S
   const n = energies.length;
   const value = compensatedSum(energies) / n;
   const hours = seconds / n / 3600;
+  const limit = accuracy.lowerLimitWatts ?? 0;
   const ofMean = instrumentUncertainty(accuracy, value / hours);
   const parts: UncertaintyParts = {
     gain: ofMean.gain * hours,
     offset: ofMean.offset * hours,
-    resolution: energyResolution(first, accuracy, hours),
-    repeatability:
-      n < 2 ? 0 : ((studentTQuantile(0.975, n - 1) / NORMAL_95) * standardDeviation(energies)) / Math.sqrt(n),
-    drift: n < 2 ? 0.02 * value : 0,
-    belowLimit: 0,
+    // Each use has its own ends, and a step through the whole of it.
+    resolution: meanResolution(first.trace, accuracy, seconds / n, 1) * hours,
+    repeatability: n < 2 ? 0 : repeatedReadings(energies),
+    drift: driftUncertainty(value, seconds),
+    belowLimit: belowLimitUncertainty(shareBelowLimit(stretches, limit), limit) * hours,
   };
   return {
     quantity: 'use-energy',
-    powerKind: first.trace.powerKind === 'real' && accuracy.readsTruePower ? 'real' : 'apparent',
+    powerKind: powerKindOf(first.trace, accuracy),
     value,
     standardUncertainty: combineParts(parts),
     parts,
@@ -50,10 +49,4 @@ export function measureUseEnergy(stretches: readonly TraceStretch[], accuracy: S
     coverage: Math.min(...uses.map((figures) => figures.coverage)),
     countedSeconds: seconds,
   };
-}
-
-/** A counter is read twice, so its step counts twice: q/√6. Power keeps its step through the whole use. */
-function energyResolution({ trace }: TraceStretch, accuracy: StatedAccuracy, hours: number): number {
-  if (trace.kind === 'counter') return trace.step / Math.sqrt(6);
-  return accuracy.counts > 0 ? 0 : (stepWatts(trace, accuracy) / Math.sqrt(12)) * hours;
 }

@@ -24,12 +24,17 @@ export function instrumentUncertainty(
 }
 
 /**
- * The standard uncertainty of a display or logger that reads in steps of q: q/√12; nothing where stated counts hold
- * it already.
+ * The standard uncertainty of a display or logger that reads in steps of q: q/√12; nothing where stated counts hold it
+ * already. They hold the display's own step, not that of a logger which writes down less than the display shows.
  *
  * Source: JCGM 100:2008 (GUM), F.2.2.1.
- * @example resolutionUncertainty(0.1, 0) // 0.0288…
+ * @param step q, in the unit of the reading.
+ * @example resolutionUncertainty(0.1, { counts: 0, resolutionWatts: 0.1 }) // 0.0288…
  */
-export function resolutionUncertainty(step: number, counts: number): number {
-  return counts > 0 ? 0 : step / Math.sqrt(12);
+export function resolutionUncertainty(
+  step: number,
+  accuracy: Pick<StatedAccuracy, 'counts' | 'resolutionWatts'>,
+): number {
+  const isHeld = accuracy.counts > 0 && step <= accuracy.resolutionWatts * (1 + 1e-9);
+  return isHeld ? 0 : step / Math.sqrt(12);
 }

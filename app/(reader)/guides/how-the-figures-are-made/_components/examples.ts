@@ -41,7 +41,7 @@ export function meterReading() {
   const watts = 43.2;
   const stated = { percentOfReading: 1, percentOfRange: 0, rangeWatts: null, counts: 1, resolutionWatts: 0.1 };
   const { gain, offset } = instrumentUncertainty(stated, watts);
-  const resolution = resolutionUncertainty(stated.resolutionWatts, stated.counts);
+  const resolution = resolutionUncertainty(stated.resolutionWatts, stated);
   const parts = { gain, offset, resolution, repeatability: 0.25, drift: 0, belowLimit: 0 };
   return { watts, halfWidth: (gain + offset) * Math.sqrt(3), parts, standard: combineParts(parts) };
 }
