@@ -59,7 +59,7 @@ export function proposePhases(trace: Trace, options: { duty: Duty; span?: Span }
       [
         ...steady.flatMap((span) => phaseOf(trace, span, 'steady', [])),
         ...cycling.flatMap((stretch) =>
-          phaseOf(trace, stretch, 'cycling', cycleExceptions(stretch.finding, levelsWithin(trace, stretch, fine))),
+          phaseOf(trace, stretch, 'cycling', cycleExceptions(stretch.finding, within(stretch, fine))),
         ),
       ].sort((a, b) => a.fromSeconds - b.fromSeconds),
       whole.step,
@@ -105,10 +105,8 @@ function explainedShare(parts: readonly SteadyPart[], levels: readonly Segment[]
   return total > 0 ? 1 - squares.reduce((sum, part) => sum + part.left, 0) / total : 1;
 }
 
-function levelsWithin(trace: Trace, span: Span, levels: readonly Span[]): (Span & { meanWatts: number })[] {
-  return levels
-    .filter((level) => level.fromSeconds >= span.fromSeconds && level.toSeconds <= span.toSeconds)
-    .flatMap((level) => phaseOf(trace, level, 'steady', []));
+function within<T extends Span>(span: Span, levels: readonly T[]): T[] {
+  return levels.filter((level) => level.fromSeconds >= span.fromSeconds && level.toSeconds <= span.toSeconds);
 }
 
 function phaseOf(trace: Trace, span: Span, kind: ProposedPhase['kind'], exceptions: CycleException[]): ProposedPhase[] {

@@ -55,14 +55,17 @@ export function segmentsOf({ blocks, step, penalty }: SteadyPart, factor: number
  * Where the segments lie in the trace, to the reading. Between two samples of different levels the power went from one
  * to the other: that step belongs to neither.
  */
-export function spansOf({ steps, blocks, isSamples }: SteadyPart, segments: readonly Segment[]): Span[] {
+export function spansOf(
+  { steps, blocks, isSamples }: SteadyPart,
+  segments: readonly Segment[],
+): (Span & { meanWatts: number })[] {
   const n = steps.starts.length;
   const edges = [0, ...exactEdges(steps, blocks, segments), n];
-  return segments.map((_, i) => {
+  return segments.map(({ meanWatts }, i) => {
     const first = edges[i] as number;
     const last = (edges[i + 1] as number) - 1;
     const end = (steps.starts[last] as number) + (isSamples ? 0 : (steps.seconds[last] as number));
-    return { fromSeconds: steps.starts[first] as number, toSeconds: end };
+    return { fromSeconds: steps.starts[first] as number, toSeconds: end, meanWatts };
   });
 }
 

@@ -19,9 +19,7 @@ export function countCells(trace: Trace, reach: Reach): CountedSteps {
   const limit = gapLimitSeconds(trace);
   const { first, end } = cellsWithin(trace, reach, isForward);
   const n = Math.max(0, end - first);
-  const starts = new Float64Array(n);
-  const seconds = new Float64Array(n);
-  const joules = new Float64Array(n);
+  const [starts, seconds, joules] = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
   const watts = kind === 'counter' ? new Float64Array(n) : values.subarray(first, first + n);
   const weights = kind === 'counter' ? new Float64Array(n) : seconds;
   const gaps: CountedSteps['gaps'] = [];
@@ -29,29 +27,28 @@ export function countCells(trace: Trace, reach: Reach): CountedSteps {
   const clip = (time: number) => Math.min(reach.toSeconds, Math.max(reach.fromSeconds, time));
   for (let j = 0; j < n; j += 1) {
     const i = first + j;
-    let from = isForward ? (times[i] as number) : (times[i - 1] ?? (times[i] as number) - own);
-    let to = isForward ? (times[i + 1] ?? (times[i] as number) + own) : (times[i] as number);
-    if (to - from > limit) {
-      const gap = isForward ? [from + own, to] : [from, to - own];
-      const [fromSeconds, toSeconds] = [clip(gap[0] as number), clip(gap[1] as number)];
+    const at = times[i] as number;
+    const neighbour = times[isForward ? i + 1 : i - 1] ?? (isForward ? at + own : at - own);
+    const isGap = Math.abs(at - neighbour) > limit;
+    const edge = isGap ? at + Math.sign(neighbour - at) * own : neighbour;
+    const [from, to] = [clip(Math.min(at, edge)), clip(Math.max(at, edge))];
+    if (isGap) {
+      const [fromSeconds, toSeconds] = [clip(Math.min(edge, neighbour)), clip(Math.max(edge, neighbour))];
       if (toSeconds > fromSeconds) gaps.push({ fromSeconds, toSeconds });
       breaks.push(isForward ? j + 1 : j);
-      if (isForward) to = from + own;
-      else from = to - own;
     }
-    starts[j] = clip(from);
-    seconds[j] = clip(to) - clip(from);
+    starts[j] = from;
+    seconds[j] = to - from;
     if (kind === 'counter') {
       const rise = (values[i] as number) - (values[i - 1] as number);
-      watts[j] = (rise * 3600) / (to - from);
-      const isKnown = to - from <= LONGEST_COUNTER_STEP * own || rise <= 1.5 * trace.step;
-      if (isKnown) weights[j] = seconds[j] as number;
+      watts[j] = (rise * 3600) / (at - neighbour);
+      if (at - neighbour <= LONGEST_COUNTER_STEP * own || rise <= 1.5 * trace.step) weights[j] = to - from;
       else {
-        gaps.push({ fromSeconds: clip(from), toSeconds: clip(to) });
+        gaps.push({ fromSeconds: from, toSeconds: to });
         breaks.push(j, j + 1);
       }
     }
-    joules[j] = (watts[j] as number) * (seconds[j] as number);
+    joules[j] = (watts[j] as number) * (to - from);
   }
   return { starts, watts, seconds, joules, weights, readings: { first: 0, end: n }, gaps, breaks, ...reach };
 }

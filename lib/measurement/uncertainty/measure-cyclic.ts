@@ -58,7 +58,6 @@ export function measureCyclic(stretch: TraceStretch, accuracy: StatedAccuracy): 
   const covered = finding.running.seconds + finding.between.seconds;
   const mean = figure(finding.meanWatts, covered, cyclicRepeatability(finding.cycles));
   // Between cycles a plug-in meter often reads nothing: what it can't see may be there all the same.
-  const limit = accuracy.lowerLimitWatts ?? 0;
   mean.parts.belowLimit = belowLimitUncertainty(shareBelowLimit([stretch], limit), limit);
   mean.standardUncertainty = combineParts(mean.parts);
   return {
