@@ -1,8 +1,14 @@
 import { OUTCOME_WORDS } from '@/lib/measurement/claims/outcome-words';
 import type { ClaimBeside, ClaimedFigure } from '@/lib/claims/rules';
 
+interface OutcomeLineProps {
+  beside: ClaimBeside<ClaimedFigure>;
+  /** Which figure the claim is about. */
+  of: string;
+}
+
 /** The bracket is the maker's and slate; the outcome is ours and in ink. */
-export function OutcomeLine({ beside }: { beside: ClaimBeside<ClaimedFigure> }) {
+export function OutcomeLine({ beside, of }: OutcomeLineProps) {
   const { comparison, sentence } = beside;
   const words = comparison ? OUTCOME_WORDS[comparison.outcome] : 'not measured yet';
   return (
@@ -11,7 +17,9 @@ export function OutcomeLine({ beside }: { beside: ClaimBeside<ClaimedFigure> }) 
         <path d="M1.5 11V2.5h19V11" className="fill-none stroke-slate" strokeWidth="2" />
       </svg>
       <span>
-        <span className="block font-semibold first-letter:uppercase">{words}</span>
+        <span className="block font-semibold">
+          {of}: {words}
+        </span>
         <span className="block text-muted">{sentence}</span>
       </span>
     </p>

@@ -1,17 +1,14 @@
 import type { Metadata } from 'next';
 import { notFound, permanentRedirect } from 'next/navigation';
 import { OutcomeLine } from '@/components/claims/outcome-line';
-import { Crumbs, PageTitle, Section } from '@/components/layout/headings';
-import { Empty } from '@/components/layout/notices';
+import { Crumbs, PageTitle } from '@/components/layout/headings';
 import { Sheet } from '@/components/layout/sheet';
-import { LinkButton } from '@/components/ui/button';
 import { figureName, medianOf, plainUnit, voicesOf } from '@/components/figures/figure-words';
-import { ReportTable } from '@/components/reports/reading/report-table';
+import { CLAIM_KIND_WORDS } from '@/lib/claims/schema';
 import { loadDeviceSheet } from './_components/load-device-sheet';
 import { DeviceFacts } from './_components/device-facts';
-import { DeviceFigures } from './_components/device-figures';
+import { DeviceBody } from './_components/device-body';
 import { DeviceLead } from './_components/device-lead';
-import { InYourHome } from './_components/in-your-home';
 
 export const dynamic = 'force-static';
 export const generateStaticParams = () => [];
@@ -42,7 +39,6 @@ export default async function DevicePage({ params }: DevicePageProps) {
   if (sheet.kind === 'missing') notFound();
   if (sheet.kind === 'moved') permanentRedirect(`/devices/${sheet.slug}`);
   const { device, category, figures, besides, reports } = sheet;
-  const measure = `/reports/new?device=${device.publicId}`;
   return (
     <Sheet
       head={
@@ -56,32 +52,17 @@ export default async function DevicePage({ params }: DevicePageProps) {
           />
           <PageTitle lead={<DeviceLead category={category} figures={figures} />}>{device.name}</PageTitle>
           {besides.map((beside) => (
-            <OutcomeLine key={beside.claim.publicId} beside={beside} />
+            <OutcomeLine
+              key={beside.claim.publicId}
+              beside={beside}
+              of={beside.figure ? figureName(beside.figure) : CLAIM_KIND_WORDS[beside.claim.kind]}
+            />
           ))}
         </>
       }
       margin={<DeviceFacts devicePublicId={device.publicId} {...{ category, figures, besides }} />}
     >
-      <Section title="What it draws">
-        {figures.length > 0 ? (
-          <DeviceFigures {...{ category, figures, besides }} />
-        ) : (
-          <Empty title="No one has measured this.">
-            Plug a meter in between, note what it shows, and post it here.
-          </Empty>
-        )}
-      </Section>
-      <InYourHome category={category} figures={figures} />
-      <Section title="Reports behind these figures">
-        {reports.length > 0 ? (
-          <ReportTable reports={reports} unit={category.basis.unit} quantityWords={category.basis.label} />
-        ) : (
-          <p className="mt-4 text-muted">None yet.</p>
-        )}
-      </Section>
-      <LinkButton look="main" href={measure} className="mt-6">
-        Add your measurement
-      </LinkButton>
+      <DeviceBody {...{ device, category, figures, besides, reports }} />
     </Sheet>
   );
 }
