@@ -12,6 +12,16 @@ export const MAD_TO_STANDARD_DEVIATION = 1.482602218505602;
  * @example medianAbsoluteDeviation([1, 1, 2, 2, 4, 6, 9]) // 1
  */
 export function medianAbsoluteDeviation(values: ArrayLike<number>): number {
-  const centre = median(values);
-  return median(Float64Array.from(values, (value) => Math.abs(value - centre)));
+  return medianDistanceFrom(median(values), values);
+}
+
+/**
+ * The same for a caller that has the median already.
+ *
+ * @example medianDistanceFrom(2, [1, 1, 2, 2, 4, 6, 9]) // 1
+ */
+export function medianDistanceFrom(centre: number, values: ArrayLike<number>): number {
+  const distances = new Float64Array(values.length);
+  for (let i = 0; i < values.length; i += 1) distances[i] = Math.abs((values[i] as number) - centre);
+  return median(distances);
 }

@@ -1,5 +1,5 @@
 import { median } from './median';
-import { medianAbsoluteDeviation } from './median-absolute-deviation';
+import { medianDistanceFrom } from './median-absolute-deviation';
 
 /**
  * The modified z-scores 0.6745 (x − median) / MAD.
@@ -13,6 +13,8 @@ import { medianAbsoluteDeviation } from './median-absolute-deviation';
 export function modifiedZScores(values: ArrayLike<number>, leastDeviation: number): number[] {
   if (!(leastDeviation > 0)) throw new RangeError('The least deviation lies above 0.');
   const centre = median(values);
-  const spread = Math.max(medianAbsoluteDeviation(values), leastDeviation);
-  return Array.from(values, (value) => (0.6745 * (value - centre)) / spread);
+  const spread = Math.max(medianDistanceFrom(centre, values), leastDeviation);
+  const scores: number[] = [];
+  for (let i = 0; i < values.length; i += 1) scores.push((0.6745 * ((values[i] as number) - centre)) / spread);
+  return scores;
 }

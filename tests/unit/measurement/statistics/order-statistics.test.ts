@@ -4,6 +4,7 @@ import { median } from '@/lib/measurement/statistics/median';
 import {
   MAD_TO_STANDARD_DEVIATION,
   medianAbsoluteDeviation,
+  medianDistanceFrom,
 } from '@/lib/measurement/statistics/median-absolute-deviation';
 import { modifiedZScores } from '@/lib/measurement/statistics/modified-z';
 import { normalQuantile } from '@/lib/measurement/statistics/normal';
@@ -148,6 +149,7 @@ describe('a robust summary of NIST’s Michelso data', () => {
 describe('the median absolute deviation', () => {
   it('is the worked example’s, and R’s on samples of 1 to 60', () => {
     expect(medianAbsoluteDeviation([1, 1, 2, 2, 4, 6, 9])).toBe(1);
+    expect(medianDistanceFrom(2, [1, 1, 2, 2, 4, 6, 9])).toBe(1);
     for (const sample of fromR.samples) {
       expect(medianAbsoluteDeviation(sample.values)).toBeCloseTo(sample.mad, 10);
     }
