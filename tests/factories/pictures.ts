@@ -10,6 +10,11 @@ export async function aPng(width = 60, height = 40): Promise<Uint8Array> {
   return painted(width, height).getBuffer('image/png');
 }
 
+/** A whole picture of a kind that is not taken, to be refused for its kind and not for being torn. */
+export async function anotherPicture(kind: 'image/gif' | 'image/bmp' | 'image/tiff'): Promise<Uint8Array> {
+  return painted(20, 20).getBuffer(kind);
+}
+
 function painted(width: number, height: number) {
   const picture = new Jimp({ width, height, color: 0xff0000ff });
   for (let x = Math.floor(width / 2); x < width; x += 1) {

@@ -175,17 +175,16 @@ describe('a large log', () => {
 
   it('is read in a process of its own, with the same result, while this one goes on', async () => {
     const log = aLog(120_000, (second) => 40 + (second % 10) / 10, 1);
-    let [longest, last] = [0, performance.now()];
-    const beat = setInterval(() => {
-      longest = Math.max(longest, performance.now() - last);
-      last = performance.now();
-    }, 5);
-    const apart = await readLog(await taskOf(log), Buffer.byteLength(log));
-    clearInterval(beat);
-    expect(apart).toMatchObject({ status: 'read', summary: { samples: 120_001 } });
-    expect(apart).toEqual(await readLog(await taskOf(log), 1));
-    // Read here, its last step alone would hold up everybody for longer than that.
-    expect(longest).toBeLessThan(100);
+    const costOf = async (bytes: number) => {
+      const before = process.cpuUsage();
+      const reading = await readLog(await taskOf(log), bytes);
+      return { reading, micros: process.cpuUsage(before).user };
+    };
+    const apart = await costOf(Buffer.byteLength(log));
+    const here = await costOf(1);
+    expect(apart.reading).toMatchObject({ status: 'read', summary: { samples: 120_001 } });
+    expect(apart.reading).toEqual(here.reading);
+    expect(apart.micros).toBeLessThan(here.micros / 2);
   });
 
   it('of more rows than a quarter’s recording has is refused, not read to its end', async () => {

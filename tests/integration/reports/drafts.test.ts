@@ -47,6 +47,17 @@ const save = (id: string, content: object, version?: number, as = member) =>
     headers: version === undefined ? {} : { 'if-match': `"${version}"` },
   });
 
+const fillDrafts = (count: number) =>
+  database().models.ReportDraft.bulkCreate(
+    Array.from({ length: count }, (_, i) => ({
+      publicId: `draft${String(i).padStart(5, '0')}`,
+      memberId: member.id,
+      content: {},
+      createdAt: new Date(),
+      updatedAt: new Date(),
+    })),
+  );
+
 describe('a draft', () => {
   it('keeps whatever was typed, as it was typed', async () => {
     const content = { mean: '0,6 kW', phases: [{ note: '' }], deviceName: 'Frøsta  ', nothing: null };
@@ -107,15 +118,7 @@ describe('a draft', () => {
   });
 
   it('beyond fifty is refused, with what to do', async () => {
-    await database().models.ReportDraft.bulkCreate(
-      Array.from({ length: 50 }, (_, i) => ({
-        publicId: `draft${String(i).padStart(5, '0')}`,
-        memberId: member.id,
-        content: {},
-        createdAt: new Date(),
-        updatedAt: new Date(),
-      })),
-    );
+    await fillDrafts(50);
     const response = await begin({ content: {} });
     expect([response.status, (await json(response)).detail]).toEqual([
       429,
@@ -168,6 +171,15 @@ describe('the draft of an amendment', () => {
     const id = drafts[0]?.publicId as string;
     const kept = await json(await callRoute(getDraftRoute, { as: member, params: { id } }));
     expect(kept.amendsPublicId).toBe(report);
+  });
+
+  it('is found again also at the most drafts that one may have', async () => {
+    const report = await aSentReport();
+    await verify(report);
+    const { publicId } = await json(await begin({ content: {}, amendsPublicId: report }));
+    await fillDrafts(49);
+    expect((await begin({ content: {} })).status).toBe(429);
+    expect(await json(await begin({ content: {}, amendsPublicId: report }))).toMatchObject({ publicId });
   });
 
   it('is refused while the report waits, and of another member’s report', async () => {

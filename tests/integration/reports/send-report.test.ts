@@ -93,6 +93,9 @@ describe('sending a report', () => {
     const options = { clientKey: 'the same key' };
     const first = await send({}, options);
     expect(await send({ notes: 'changed' }, options)).toBe(first);
+    // A repeat is answered, not judged: by now the photo that it shows may be gone.
+    const gone = [{ publicId: 'abcdefghij', kind: 'display' as const, caption: '' }];
+    expect(await send({ photos: gone }, options)).toBe(first);
     expect(await database().models.ReportRevision.count()).toBe(1);
   });
 
