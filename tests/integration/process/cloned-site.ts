@@ -87,10 +87,12 @@ export class ClonedSite {
   }
 
   /** As a fresh terminal has it: nothing of the npm, the test runner or the database that this runs under. */
-  private get env() {
+  private get env(): NodeJS.ProcessEnv {
     const ours = /^(npm_|INIT_CWD$|NODE_ENV$|NODE_OPTIONS$|VITEST|TEST$|DATABASE_|NEXT_|TZ$)/i;
     const kept = Object.entries(process.env).filter(([name]) => !ours.test(name));
-    return { ...Object.fromEntries(kept), HOME: this.home, PORT: new URL(this.origin).port };
+    const fresh = { ...Object.fromEntries(kept), HOME: this.home, PORT: new URL(this.origin).port };
+    // The framework's types ask for a NODE_ENV, which a fresh terminal has not.
+    return fresh as unknown as NodeJS.ProcessEnv;
   }
 
   get said(): string {
