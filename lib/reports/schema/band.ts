@@ -25,4 +25,24 @@ export const bandReading = z.object({
   cycles: z.object({ whole: z.int().nullable(), reason: z.string().nullable() }),
 });
 
+const stretch = { fromSeconds: z.number(), toSeconds: z.number() };
+
+/** Phases that a trace suggests; the member decides. */
+export const phaseProposal = z.object({
+  phases: z.array(
+    z.object({
+      ...stretch,
+      kind: z.enum(['steady', 'start-up', 'cycling']),
+      meanWatts: z.number(),
+      countedSeconds: z.number(),
+      /** Of a stretch that cycles: what in it is unlike the rest. */
+      exceptions: z.array(z.object({ ...stretch, meanWatts: z.number(), reason: z.string() })),
+    }),
+  ),
+  /** Share of the variance that steady phases explain; null where nothing had to be simplified. */
+  explained: z.number().nullable(),
+  /** What the member is asked to do where the proposal is not worth much. */
+  advice: z.string().nullable(),
+});
+
 export type BandReading = z.infer<typeof bandReading>;

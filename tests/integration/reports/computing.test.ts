@@ -7,7 +7,12 @@ import { incomingFolder, storedName } from '@/lib/platform/storage/files';
 import { readLog } from '@/lib/reports/commands/read-log';
 import { acceptTrace } from '@/lib/reports/commands/traces';
 import { previewFiguresRoute } from '@/lib/reports/handlers/reports';
-import { downloadTraceRoute, getTraceWindowRoute, readBandsRoute } from '@/lib/reports/handlers/traces';
+import {
+  downloadTraceRoute,
+  getTraceWindowRoute,
+  proposePhasesRoute,
+  readBandsRoute,
+} from '@/lib/reports/handlers/trace-readings';
 import type { Phase } from '@/lib/reports/schema';
 import { aCategory, type MadeCategory } from '../../factories/catalogue';
 import { aMember, type MadeMember } from '../../factories/members';
@@ -146,6 +151,18 @@ describe('a trace that is looked through', () => {
     expect(beyond?.figures).toBeNull();
     const [plain] = (await read({ bands: bands.slice(0, 1) })).bands;
     expect(plain?.figures).toMatchObject({ standardUncertainty: null });
+  });
+
+  it('suggests its phases, by the duty type of its device, for whoever may see it', async () => {
+    const trace = await aTrace(member, aLog(86_400, freezerWatts));
+    const suggested = async (duty: string, as = member) => {
+      const response = await callRoute(proposePhasesRoute, { as, params: { id: trace }, body: { duty } });
+      return { status: response.status, ...((await response.json()) as { phases?: { kind: string }[] }) };
+    };
+    expect((await suggested('cyclic')).phases?.map((phase) => phase.kind)).toEqual(['cycling']);
+    expect((await suggested('continuous')).phases?.every((phase) => phase.kind === 'steady')).toBe(true);
+    expect((await suggested('sometimes')).status).toBe(422);
+    expect((await suggested('cyclic', await aMember())).status).toBe(404);
   });
 
   it('comes as CSV with every reading, as it was read', async () => {

@@ -217,7 +217,9 @@ describe('the supply', () => {
 
 describe('what yields no figure', () => {
   it('is a phase without counted time, with the reason', () => {
-    const { figures, refusals } = compute([tracedPhase('idle', 'a', 5, 6)], { a: aTrace(3600, () => 8) });
+    const timeSeconds = Float64Array.from([0, 10, 20, 30, 9000, 9010, 9020]);
+    const gap = aTrace(0, () => 8, { timeSeconds, values: new Float64Array(7).fill(8) });
+    const { figures, refusals } = compute([tracedPhase('idle', 'a', 2000, 4000)], { a: gap });
     expect(figures).toEqual([]);
     expect(refusals).toMatchObject([{ modeCode: 'idle', reason: expect.stringMatching(/no counted time/) }]);
   });

@@ -1,3 +1,3 @@
-import { readBandsRoute } from '@/lib/reports/handlers/traces';
+import { readBandsRoute } from '@/lib/reports/handlers/trace-readings';
 
 export const POST = readBandsRoute.handler;

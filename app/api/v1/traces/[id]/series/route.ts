@@ -1,3 +1,3 @@
-import { downloadTraceRoute } from '@/lib/reports/handlers/traces';
+import { downloadTraceRoute } from '@/lib/reports/handlers/trace-readings';
 
 export const GET = downloadTraceRoute.handler;

@@ -1,3 +1,3 @@
-import { getTraceWindowRoute } from '@/lib/reports/handlers/traces';
+import { getTraceWindowRoute } from '@/lib/reports/handlers/trace-readings';
 
 export const GET = getTraceWindowRoute.handler;

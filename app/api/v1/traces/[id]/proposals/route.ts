@@ -1,0 +1,3 @@
+import { proposePhasesRoute } from '@/lib/reports/handlers/trace-readings';
+
+export const POST = proposePhasesRoute.handler;
