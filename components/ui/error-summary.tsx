@@ -8,6 +8,8 @@ interface ErrorSummaryProps {
   title?: string;
   /** Raise it at each failed submission, so that the same errors take the focus again. */
   attempt?: number;
+  /** Brings a control onto the page that is not on it: another step of a form. */
+  onReveal?: (field: string) => void;
 }
 
 const PREFIX = 'Error: ';
@@ -16,7 +18,12 @@ const PREFIX = 'Error: ';
  * What is wrong with the whole form: stands first in main, above the h1. Takes the focus whenever it appears or changes,
  * and tells a reader of the window's title too.
  */
-export function ErrorSummary({ errors, title = 'There is something to put right', attempt = 0 }: ErrorSummaryProps) {
+export function ErrorSummary({
+  errors,
+  title = 'There is something to put right',
+  attempt = 0,
+  onReveal,
+}: ErrorSummaryProps) {
   const box = useRef<HTMLDivElement>(null);
   const shown = errors.length > 0;
   const words = errors.map((error) => error.message).join('\n');
@@ -36,9 +43,20 @@ export function ErrorSummary({ errors, title = 'There is something to put right'
   }, [shown]);
 
   function go(event: MouseEvent, field: string) {
+    if (document.getElementById(field)) {
+      event.preventDefault();
+      return focusOn(field);
+    }
+    if (!onReveal) return;
+    event.preventDefault();
+    onReveal(field);
+    // The control is there once React has drawn what was revealed.
+    requestAnimationFrame(() => requestAnimationFrame(() => focusOn(field)));
+  }
+
+  function focusOn(field: string) {
     const target = document.getElementById(field);
     if (!target) return;
-    event.preventDefault();
     const label = document.querySelector(`label[for="${CSS.escape(field)}"]`) ?? target;
     label.scrollIntoView({ block: 'start' });
     target.focus({ preventScroll: true });

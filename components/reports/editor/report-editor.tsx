@@ -100,7 +100,7 @@ export function ReportEditor({ data, initial, amendsPublicId }: ReportEditorProp
   const errorOf = (field: string) => problems.find((problem) => problem.field === field)?.message;
   return (
     <FormProvider {...form}>
-      <ErrorSummary errors={problems} attempt={attempt} />
+      <ErrorSummary errors={problems} attempt={attempt} onReveal={(field) => setStep(stepOf(field))} />
       <SaveNote
         state={state}
         mine={() => form.getValues()}
