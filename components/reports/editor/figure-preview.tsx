@@ -6,6 +6,7 @@ import { z } from 'zod';
 import { Notice } from '@/components/layout/notices';
 import { Table, Td, Th, Tr } from '@/components/ui/table';
 import { formatDuration, formatFigure } from '@/lib/measurement/units/format-figure';
+import { readQuantity } from '@/lib/measurement/units/read-quantity';
 import { callApi } from '@/lib/platform/http/call-api';
 import { reportFigure } from '@/lib/reports/schema';
 import { phase, type Phase } from '@/lib/reports/schema/content';
@@ -16,6 +17,7 @@ import type { EditorCategory } from './use-editor-data';
 const preview = z.object({
   figures: z.array(reportFigure.omit({ id: true, setAside: true, modeName: true })),
   refusals: z.array(z.object({ modeCode: z.string().nullable(), reason: z.string() })),
+  missing: z.array(z.string()),
 });
 
 const QUANTITY_WORDS: Record<string, string> = {
@@ -51,6 +53,12 @@ function readyPhases(values: EditorValues): Phase[] {
   return traced.filter((known) => phase.safeParse(known).success);
 }
 
+/** The voltage, where one was measured and can be read. */
+function voltsOf({ supplyVolts }: EditorValues): number | null {
+  const reading = readQuantity(supplyVolts, 'V');
+  return reading.status === 'understood' && reading.value > 0 && reading.value <= 1000 ? reading.value : null;
+}
+
 /** Figures with their uncertainty as readings come in, so that the member sees what the instrument can tell. */
 export function FigurePreview({ category }: { category: EditorCategory }) {
   const form = useFormContext<EditorValues>();
@@ -59,6 +67,9 @@ export function FigurePreview({ category }: { category: EditorCategory }) {
   const body = {
     categoryPublicId: category.publicId,
     instrumentPublicId: values.instrumentPublicId,
+    methodCode: values.methodCode || null,
+    ...(values.supplyClass ? { supplyClass: values.supplyClass } : {}),
+    supplyVolts: voltsOf(values),
     phases,
   };
   const result = useQuery({
@@ -85,6 +96,14 @@ export function FigurePreview({ category }: { category: EditorCategory }) {
           {refusal.reason}
         </Notice>
       ))}
+      {result.data && result.data.missing.length > 0 && (
+        <Notice title="What the method asks for besides">
+          {result.data.missing.map((line) => (
+            <p key={line}>{line}</p>
+          ))}
+          <p>You can send it all the same; the moderator decides.</p>
+        </Notice>
+      )}
       {result.data && result.data.figures.length > 0 && (
         <Table caption="Figures so far, with their uncertainty (k = 2)">
           <thead>
@@ -99,7 +118,7 @@ export function FigurePreview({ category }: { category: EditorCategory }) {
           </thead>
           <tbody>
             {result.data.figures.map((figure) => (
-              <Tr key={`${figure.modeCode} ${figure.quantity}`}>
+              <Tr key={`${figure.modeCode} ${figure.quantity} ${figure.powerKind}`}>
                 <Td>{nameOf(figure.modeCode)}</Td>
                 <Td>{QUANTITY_WORDS[figure.quantity]}</Td>
                 <Td numeric>

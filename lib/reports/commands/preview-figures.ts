@@ -47,9 +47,10 @@ export async function previewFigures(
     instrument,
     traces,
   });
+  const nameOf = (code: string) => category.modes.find((mode) => mode.code === code)?.name ?? code;
   const method = methodCode === null ? null : await findMethod(work, methodCode);
   const seconds = phases.reduce((sum, phase) => sum + secondsOf(phase), 0);
-  return { ...computation, missing: method ? whatIsMissing(method, computation, seconds) : [] };
+  return { ...computation, missing: method ? whatIsMissing(method, computation, seconds, nameOf) : [] };
 }
 
 function secondsOf(phase: Phase): number {

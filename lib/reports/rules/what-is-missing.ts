@@ -15,17 +15,23 @@ const LEAST_COVERAGE = 0.9;
  * What a report lacks of its method's minimum, in words. It can be sent all the same: the moderator decides.
  *
  * @param countedSeconds of all its phases together.
+ * @param nameOf a mode's name, as the category has it.
  */
-export function whatIsMissing(method: MethodMinimum, computation: Computation, countedSeconds: number): string[] {
+export function whatIsMissing(
+  method: MethodMinimum,
+  computation: Computation,
+  countedSeconds: number,
+  nameOf: (modeCode: string) => string,
+): string[] {
   const missing: string[] = [];
   const { minimumSeconds, minimumCycles } = method;
   if (minimumSeconds > WHOLE_RECORDING_SECONDS && countedSeconds < minimumSeconds) {
     missing.push(`The method asks for ${inWords(minimumSeconds)}; ${inWords(countedSeconds)} are there.`);
   }
   for (const { modeCode, quantity, countedSeconds: seconds, coverage } of computation.figures) {
-    const name = modeCode ?? 'the whole';
+    const name = modeCode === null ? 'The whole' : nameOf(modeCode);
     const isShort = minimumSeconds <= WHOLE_RECORDING_SECONDS && seconds < minimumSeconds;
-    if (quantity === 'mean-power' && isShort && !START_UPS.includes(name)) {
+    if (quantity === 'mean-power' && isShort && !START_UPS.includes(modeCode ?? '')) {
       missing.push(`${name}: the method asks for ${inWords(minimumSeconds)}; ${inWords(seconds)} are there.`);
     }
     if (coverage !== null && coverage < LEAST_COVERAGE) {

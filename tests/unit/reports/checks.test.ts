@@ -69,6 +69,7 @@ describe('modes that were exchanged', () => {
 });
 
 describe('what a report lacks of its method', () => {
+  const nameOf = (code: string) => `Mode ${code}`;
   const computed = (figures: ReportFigureDraft[], wholeCycles: number | null = null): Computation => ({
     figures,
     refusals: [],
@@ -77,28 +78,29 @@ describe('what a report lacks of its method', () => {
 
   it('is nothing where the minimum is reached', () => {
     const method = { minimumSeconds: 600, minimumCycles: 3 };
-    expect(whatIsMissing(method, computed([figure('idle', 8)], 3), 600)).toEqual([]);
+    expect(whatIsMissing(method, computed([figure('idle', 8)], 3), 600, nameOf)).toEqual([]);
   });
 
   it('is told mode by mode for a method of minutes, but not of a start-up', () => {
     const method = { minimumSeconds: 600, minimumCycles: 0 };
     const figures = [figure('idle', 8, { countedSeconds: 420 }), figure('boot', 12, { countedSeconds: 95 })];
-    expect(whatIsMissing(method, computed(figures), 515)).toEqual([
-      'idle: the method asks for 10 minutes; 7 minutes are there.',
+    expect(whatIsMissing(method, computed(figures), 515, nameOf)).toEqual([
+      'Mode idle: the method asks for 10 minutes; 7 minutes are there.',
     ]);
   });
 
   it('is told of the whole recording for a method of hours', () => {
     const method = { minimumSeconds: 86_400, minimumCycles: 0 };
-    expect(whatIsMissing(method, computed([figure('idle', 8)]), 80_000)).toEqual([
+    expect(whatIsMissing(method, computed([figure('idle', 8)]), 80_000, nameOf)).toEqual([
       'The method asks for 24 hours; 22.2 hours are there.',
     ]);
   });
 
   it('names gaps from a tenth of the time on', () => {
     const method = { minimumSeconds: 0, minimumCycles: 0 };
-    const missing = (coverage: number) => whatIsMissing(method, computed([figure('idle', 8, { coverage })]), 600);
+    const missing = (coverage: number) =>
+      whatIsMissing(method, computed([figure('idle', 8, { coverage })]), 600, nameOf);
     expect(missing(0.9)).toEqual([]);
-    expect(missing(0.899)).toEqual(['idle: only 89 % of the time counts, the rest are gaps.']);
+    expect(missing(0.899)).toEqual(['Mode idle: only 89 % of the time counts, the rest are gaps.']);
   });
 });
