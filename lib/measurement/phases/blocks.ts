@@ -1,3 +1,4 @@
+import { CompensatedSum } from '../statistics/compensated-sum';
 import type { CountedSteps } from '../traces/steps';
 import type { TraceKind } from '../traces/trace';
 
@@ -9,8 +10,9 @@ export interface Blocks {
   /** W, one a block. */
   means: Float64Array;
   blockSeconds: number;
-  /** How long each entry of the steps stands in the series (s). */
-  entrySeconds: Float64Array;
+  /** How long the entries before each stand in the series (s), and the energy (J) of them: one more than entries. */
+  time: Float64Array;
+  energy: Float64Array;
 }
 
 /**
@@ -22,26 +24,35 @@ export interface Blocks {
  * @example averageIntoBlocks(steps of 470 even samples, 'samples', 1)?.means.length // 470
  */
 export function averageIntoBlocks(steps: CountedSteps, kind: TraceKind, dt: number): Blocks | null {
-  const entrySeconds = kind === 'samples' ? lengthsOf(steps) : steps.weights;
-  const total = entrySeconds.reduce((sum, seconds) => sum + seconds, 0);
+  const lengths = kind === 'samples' ? lengthsOf(steps) : steps.weights;
+  const { time, energy } = cumulate(lengths, steps.watts);
+  const total = time[lengths.length] as number;
   if (!(total > 0)) return null;
   const count = Math.max(1, Math.min(MOST_BLOCKS, Math.round(total / dt)));
   const blockSeconds = total / count;
-  const joules = new Float64Array(count);
-  let reached = 0;
-  for (let i = 0; i < entrySeconds.length; i += 1) {
-    const end = reached + (entrySeconds[i] as number);
-    let block = Math.min(count - 1, Math.floor(reached / blockSeconds + 1e-9));
-    let from = reached;
-    while (from < end) {
-      const to = block === count - 1 ? end : Math.min(end, (block + 1) * blockSeconds);
-      if (to > from) joules[block] = (joules[block] as number) + (to - from) * (steps.watts[i] as number);
-      from = Math.max(from, to);
-      block += 1;
-    }
-    reached = end;
+  const means = new Float64Array(count);
+  let entry = 0;
+  let before = 0;
+  for (let block = 0; block < count; block += 1) {
+    const edge = block === count - 1 ? total : (block + 1) * blockSeconds;
+    while (entry < lengths.length - 1 && (time[entry + 1] as number) <= edge) entry += 1;
+    const upTo = (energy[entry] as number) + (edge - (time[entry] as number)) * (steps.watts[entry] as number);
+    means[block] = (upTo - before) / blockSeconds;
+    before = upTo;
   }
-  return { means: joules.map((energy) => energy / blockSeconds), blockSeconds, entrySeconds };
+  return { means, blockSeconds, time, energy };
+}
+
+function cumulate(lengths: Float64Array, watts: Float64Array): { time: Float64Array; energy: Float64Array } {
+  const [time, energy] = [new Float64Array(lengths.length + 1), new Float64Array(lengths.length + 1)];
+  const [ofTime, ofEnergy] = [new CompensatedSum(), new CompensatedSum()];
+  for (let i = 0; i < lengths.length; i += 1) {
+    ofTime.add(lengths[i] as number);
+    ofEnergy.add((lengths[i] as number) * (watts[i] as number));
+    time[i + 1] = ofTime.value;
+    energy[i + 1] = ofEnergy.value;
+  }
+  return { time, energy };
 }
 
 /**

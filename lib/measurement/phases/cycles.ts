@@ -49,15 +49,16 @@ const DAY_SECONDS = 86_400;
  * lies between 0.02 and 0.98; otherwise no day energy follows, and the reason says why. (Without these guards cycles
  * were found on half of 62 real traces, with means up to 91 times off; with them exactly the thermostats were.)
  *
- * Method: running median of five where dt ≤ 10 s; Otsu's threshold; hysteresis. A log of changes is not smoothed: one
- * of its rows may stand for an hour, and five rows for no length in particular.
+ * Method: running median of five where dt ≤ 10 s; Otsu's threshold; hysteresis. A log of changes has
+ * no dt to go by: one of its rows may stand for an hour, so it is not smoothed, and its shortest runs last 30 s.
  * @example findCycles(trace of a freezer over two days, from, to).accepted // true
  */
 export function findCycles(trace: Trace, fromSeconds: number, toSeconds: number): CycleFinding {
   const steps = countStretch(trace, fromSeconds, toSeconds);
   if (steps === null || steps.watts.length < 3) return refused('There are too few readings to see a cycle.');
-  const dt = medianStepSeconds(trace);
-  const smooth = dt <= 10 && trace.kind !== 'changes' ? runningMedian5(steps.watts) : steps.watts;
+  const isChanges = trace.kind === 'changes';
+  const dt = isChanges ? 0 : medianStepSeconds(trace);
+  const smooth = dt <= 10 && !isChanges ? runningMedian5(steps.watts) : steps.watts;
   const found = findOnOffRuns(smooth, steps.weights, Math.max(30, 3 * dt));
   if (!found) return refused('The power never changes, so nothing switches on and off.');
   const { onWatts, offWatts, runs } = found;

@@ -1,4 +1,5 @@
 import type { Trace } from '../traces/trace';
+import { readingAfter, readingBefore } from './beside';
 import { findCycles, type AcceptedCycles } from './cycles';
 import type { Span } from './steady-levels';
 
@@ -26,8 +27,8 @@ export function cyclingStretches(trace: Trace, span: Span, steady: readonly Span
   const [longest] = [...within].sort((a, b) => lengthOf(b) - lengthOf(a));
   if (cuts === 0 || !longest || lengthOf(longest) < LEAST_STEADY_SHARE * lengthOf(span)) return [];
   return [
-    ...cyclingStretches(trace, { ...span, toSeconds: longest.fromSeconds }, within, cuts - 1),
-    ...cyclingStretches(trace, { ...span, fromSeconds: longest.toSeconds }, within, cuts - 1),
+    ...cyclingStretches(trace, { ...span, toSeconds: readingBefore(trace, longest.fromSeconds) }, within, cuts - 1),
+    ...cyclingStretches(trace, { ...span, fromSeconds: readingAfter(trace, longest.toSeconds) }, within, cuts - 1),
   ];
 }
 

@@ -1,8 +1,9 @@
-/** Blocks from first to end (half open) and their mean (W). */
+/** Entries of a series from first to end (half open), their mean (W), and how much they weigh. */
 export interface Segment {
   first: number;
   end: number;
   meanWatts: number;
+  weight: number;
 }
 
 /**
@@ -10,7 +11,7 @@ export interface Segment {
  * equals the earliest; means are recomputed after each.
  *
  * @param step q in W.
- * @example joinClose([{ first: 0, end: 5, meanWatts: 50 }, { first: 5, end: 10, meanWatts: 51 }], 0) // one of 50.5 W
+ * @example joinClose([50 W and 51 W of one weight], 0) // one of 50.5 W
  */
 export function joinClose(segments: readonly Segment[], step: number): Segment[] {
   const kept = [...segments];
@@ -36,10 +37,7 @@ export function closeness(a: { meanWatts: number }, b: { meanWatts: number }, st
 }
 
 function join(a: Segment, b: Segment): Segment {
-  const [ofA, ofB] = [a.end - a.first, b.end - b.first];
-  return {
-    first: a.first,
-    end: b.end,
-    meanWatts: (a.meanWatts * ofA + b.meanWatts * ofB) / (ofA + ofB),
-  };
+  const weight = a.weight + b.weight;
+  const meanWatts = (a.meanWatts * a.weight + b.meanWatts * b.weight) / weight;
+  return { first: a.first, end: b.end, meanWatts, weight };
 }

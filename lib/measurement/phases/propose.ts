@@ -1,12 +1,12 @@
 import { stretchFigures } from '../traces/figures';
-import { firstAbove, firstAtLeast } from '../traces/search-sorted';
 import type { Trace } from '../traces/trace';
 import type { Duty } from '../units/quantity';
+import { readingAfter, readingBefore } from './beside';
 import { cycleExceptions, type CycleException } from './cycle-exceptions';
 import { cyclingStretches, type CyclingStretch } from './cycling-stretches';
 import type { Segment } from './join-close';
 import { startUps } from './start-up';
-import { segmentsOf, spansOf, squaresOf, steadyPart, type Span, type SteadyPart } from './steady-levels';
+import { levelsOf, spansOf, squaresOf, steadyPart, type Span, type SteadyPart } from './steady-levels';
 
 /** A stretch that the member may take for a phase. Nothing is decided by it. */
 export interface ProposedPhase extends Span {
@@ -45,7 +45,7 @@ const EMPTY = 'There is no counted time in this stretch, so no phases can be fou
 export function proposePhases(trace: Trace, options: { duty: Duty; span?: Span }): PhaseProposal {
   const whole = steadyPart(trace, options.span ?? { fromSeconds: -Infinity, toSeconds: Infinity });
   if (!whole) return { phases: [], explained: null, advice: EMPTY };
-  const fine = options.duty === 'cyclic' ? spansOf(whole, segmentsOf(whole, 1)) : [];
+  const fine = options.duty === 'cyclic' ? spansOf(whole, levelsOf(whole, 1)) : [];
   const cycling = fine.length > 0 ? cyclingStretches(trace, whole.steps, fine) : [];
   const parts =
     cycling.length > 0
@@ -72,7 +72,7 @@ export function proposePhases(trace: Trace, options: { duty: Duty; span?: Span }
 /** Doubles the penalty until all parts together have few enough levels. */
 function fewLevels(parts: readonly SteadyPart[], most: number): { levels: Segment[][]; factor: number } {
   for (let factor = 1; ; factor *= 2) {
-    const levels = parts.map((part) => segmentsOf(part, factor));
+    const levels = parts.map((part) => levelsOf(part, factor));
     const count = levels.reduce((sum, segments) => sum + segments.length, 0);
     // A part without changes has one level: there are no fewer.
     if (count <= Math.max(most, parts.length)) return { levels, factor };
@@ -86,17 +86,6 @@ function spansBeside(trace: Trace, whole: Span, cycling: readonly CyclingStretch
   return starts
     .map((fromSeconds, i) => ({ fromSeconds, toSeconds: ends[i] as number }))
     .filter((span) => span.toSeconds > span.fromSeconds);
-}
-
-/** A sample stands at its time; what averages and held values stand for begins there, and needs no step aside. */
-function readingBefore({ kind, timeSeconds }: Trace, seconds: number): number {
-  if (kind !== 'samples') return seconds;
-  return timeSeconds[firstAtLeast(timeSeconds, seconds) - 1] ?? -Infinity;
-}
-
-function readingAfter({ kind, timeSeconds }: Trace, seconds: number): number {
-  if (kind !== 'samples') return seconds;
-  return timeSeconds[firstAbove(timeSeconds, seconds)] ?? Infinity;
 }
 
 function explainedShare(parts: readonly SteadyPart[], levels: readonly Segment[][]): number {

@@ -1,8 +1,10 @@
+import { CompensatedSum } from '../statistics/compensated-sum';
+import { mean } from '../statistics/mean';
 import { medianStepSeconds } from '../traces/step';
 import { countStretch, type CountedSteps } from '../traces/steps';
 import type { Trace } from '../traces/trace';
 import { averageIntoBlocks, type Blocks } from './blocks';
-import { changePoints, segmentCost } from './change-points';
+import { changePoints } from './change-points';
 import { exactEdges } from './exact-edges';
 import { joinClose, type Segment } from './join-close';
 import { noiseOf } from './noise';
@@ -37,41 +39,58 @@ export function steadyPart(trace: Trace, { fromSeconds, toSeconds }: Span): Stea
 }
 
 /**
- * The segments of blocks with the least squares about their means, a penalty a change; neighbours too close are joined.
+ * The steady levels of a part, by reading: the segments of blocks with the least squares about their means, a penalty a
+ * change, their edges moved to the exact reading, neighbours too close joined. A block that a change falls into has a
+ * level of its own that nobody read: what was made of it joins its neighbour once the edges are exact.
  *
  * @param factor by which the part's own penalty is multiplied.
  */
-export function segmentsOf({ blocks, step, penalty }: SteadyPart, factor: number): Segment[] {
-  const starts = [0, ...changePoints(blocks.means, penalty * factor, LEAST_BLOCKS)];
-  const segments = starts.map((first, i) => {
-    const end = starts[i + 1] ?? blocks.means.length;
-    const sum = blocks.means.subarray(first, end).reduce((total, watts) => total + watts, 0);
-    return { first, end, meanWatts: sum / (end - first) };
+export function levelsOf({ steps, blocks, step, penalty }: SteadyPart, factor: number): Segment[] {
+  const { means, blockSeconds, time, energy } = blocks;
+  const starts = [0, ...changePoints(means, penalty * factor, LEAST_BLOCKS)];
+  const inBlocks = starts.map((first, i) => {
+    const end = starts[i + 1] ?? means.length;
+    const sum = means.subarray(first, end).reduce((total, watts) => total + watts, 0);
+    return { first, end, meanWatts: sum / (end - first), weight: end - first };
   });
-  return joinClose(segments, step);
+  const joined = joinClose(inBlocks, step);
+  const edges = [0, ...exactEdges({ watts: steps.watts, time }, blockSeconds, joined), steps.watts.length];
+  const exact = joined.flatMap((_, i) => {
+    const [first, end] = [edges[i] as number, edges[i + 1] as number];
+    const weight = (time[end] as number) - (time[first] as number);
+    return weight > 0
+      ? [{ first, end, weight, meanWatts: ((energy[end] as number) - (energy[first] as number)) / weight }]
+      : [];
+  });
+  return joinClose(exact, step);
 }
 
 /**
- * Where the segments lie in the trace, to the reading. Between two samples of different levels the power went from one
- * to the other: that step belongs to neither.
+ * Where levels lie in the trace. Between two samples of different levels the power went from one to the other: that step
+ * belongs to neither.
  */
 export function spansOf(
-  { steps, blocks, isSamples }: SteadyPart,
-  segments: readonly Segment[],
+  { steps, isSamples }: SteadyPart,
+  levels: readonly Segment[],
 ): (Span & { meanWatts: number })[] {
-  const n = steps.starts.length;
-  const edges = [0, ...exactEdges(steps, blocks, segments), n];
-  return segments.map(({ meanWatts }, i) => {
-    const first = edges[i] as number;
-    const last = (edges[i + 1] as number) - 1;
-    const end = (steps.starts[last] as number) + (isSamples ? 0 : (steps.seconds[last] as number));
-    return { fromSeconds: steps.starts[first] as number, toSeconds: end, meanWatts };
-  });
+  return levels.map(({ first, end, meanWatts }) => ({
+    fromSeconds: steps.starts[first] as number,
+    toSeconds: (steps.starts[end - 1] as number) + (isSamples ? 0 : (steps.seconds[end - 1] as number)),
+    meanWatts,
+  }));
 }
 
-/** Squares about the segments' means and about the part's own, both over time: what is left, and what there was. */
-export function squaresOf({ blocks }: SteadyPart, segments: readonly Segment[]): { left: number; total: number } {
-  const cost = segmentCost(blocks.means);
-  const left = segments.reduce((sum, { first, end }) => sum + cost(first, end), 0);
-  return { left: left * blocks.blockSeconds, total: cost(0, blocks.means.length) * blocks.blockSeconds };
+/** Squares (W² s) of the blocks about the levels and about the part's own mean: what is left, and what there was. */
+export function squaresOf({ blocks }: SteadyPart, levels: readonly Segment[]): { left: number; total: number } {
+  const { means, blockSeconds, time } = blocks;
+  const whole = mean(means);
+  const [left, total] = [new CompensatedSum(), new CompensatedSum()];
+  let at = 0;
+  means.forEach((watts, block) => {
+    const middle = (block + 0.5) * blockSeconds;
+    while (at + 1 < levels.length && (time[(levels[at] as Segment).end] as number) <= middle) at += 1;
+    left.add(blockSeconds * (watts - (levels[at] as Segment).meanWatts) ** 2);
+    total.add(blockSeconds * (watts - whole) ** 2);
+  });
+  return { left: left.value, total: total.value };
 }
