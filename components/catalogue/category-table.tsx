@@ -25,6 +25,7 @@ export function CategoryTable({ devices, quantityWords }: CategoryTableProps) {
             contributors
           </Th>
           <Th wide className="w-2/5">
+            <span className="sr-only">range</span>
             <RangeAxis scale={scale} unit={unit} />
           </Th>
         </tr>
