@@ -1,6 +1,6 @@
 import { variantLabel } from '@/lib/catalogue/rules';
 import type { FigureColumns } from './rules/columns';
-import { unitOf } from './rules/units';
+import { unitOf } from '@/lib/measurement/units/unit-of';
 import type { FigureSummary } from './schema';
 
 /** A published figure's row, with the names of what its ids stand for. */

@@ -1,5 +1,6 @@
 import { findFlags } from '@/lib/measurement/aggregation/flags';
 import { median } from '@/lib/measurement/statistics/median';
+import { unitOf } from '@/lib/measurement/units/unit-of';
 import type { ReportFigure, ReportView } from '@/lib/reports/schema';
 import type { Warning } from '../schema';
 
@@ -77,15 +78,16 @@ function againstPeers(figure: ReportFigure, peers: Peers | undefined): Warning[]
         ).at(-1) === true
       : ratio > LARGEST_FACTOR;
   if (!isFlagged) return [];
+  const unit = unitOf(figure.quantity, figure.powerKind);
   const [least, most] = [Math.min(...others), Math.max(...others)];
-  const message = `${name} lies outside what ${others.length} other reports found: ${range(least, most)}; here ${round(value)}.`;
+  const message = `${name} lies outside what ${others.length} other reports found: ${range(least, most)} ${unit}; here ${round(value)} ${unit}.`;
   return [{ kind: 'outside-spread', check: 'evidence', message, pointer: null }];
 }
 
 function belowLimit(figure: ReportFigure, limit: number | null): Warning[] {
   const isPower = figure.quantity.endsWith('-power');
   if (figure.censoredAt === null && !(isPower && limit !== null && Math.abs(figure.value) < limit)) return [];
-  const message = `${nameFigure(figure)} lies below what the instrument reads (${round(figure.censoredAt ?? limit ?? 0)}): it counts as “at most”.`;
+  const message = `${nameFigure(figure)} lies below what the instrument reads (${round(figure.censoredAt ?? limit ?? 0)} ${unitOf(figure.quantity, figure.powerKind)}): it counts as “at most”.`;
   return [{ kind: 'below-limit', check: 'instrument', message, pointer: null }];
 }
 
