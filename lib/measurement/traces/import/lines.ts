@@ -2,6 +2,9 @@ import { TraceProblem } from './types';
 
 /** A row of a logger is some tens of characters; a longer line is no row, and reading it would only cost. */
 const LONGEST_LINE = 20_000;
+/** As many bytes as the longest byte-order mark has. */
+const MARK_BYTES = 3;
+const NOTHING: Uint8Array = new Uint8Array(0);
 
 export interface TextLine {
   text: string;
@@ -21,25 +24,29 @@ export async function* readLines(
   mostBytes: number,
 ): AsyncGenerator<TextLine[]> {
   let decoder: TextDecoder | null = null;
+  // A stream may begin with less than a byte-order mark.
+  let held = NOTHING;
   let rest = '';
   let number = 0;
   let bytes = 0;
   for await (const chunk of source) {
     bytes += chunk.byteLength;
     if (bytes > mostBytes) throw new TraceProblem('too-large', tooLarge(mostBytes), number);
-    if (decoder === null && chunk.byteLength > 0) {
-      const encoding = detectEncoding(chunk);
-      onEncoding(encoding);
-      decoder = new TextDecoder(encoding);
+    const fresh: Uint8Array = held.byteLength > 0 ? joined(held, chunk) : chunk;
+    if (decoder === null && fresh.byteLength < MARK_BYTES) {
+      held = fresh;
+      continue;
     }
-    if (decoder === null) continue;
-    const text = rest + decoder.decode(chunk, { stream: true });
+    held = NOTHING;
+    decoder ??= decoderOf(fresh, onEncoding);
+    const text = rest + decoder.decode(fresh, { stream: true });
     const parts = text.split(/\r\n|\n|\r(?!$)/);
     rest = parts.pop() ?? '';
     if (rest.length > LONGEST_LINE) throw tooLong(number + parts.length + 1);
     const lines = parts.map((part) => check({ text: part, number: (number += 1) }));
     if (lines.length > 0) yield lines;
   }
+  if (held.byteLength > 0) rest += decoderOf(held, onEncoding).decode(held);
   rest += decoder?.decode() ?? '';
   if (rest.replace(/\r$/, '') !== '') yield [check({ text: rest.replace(/\r$/, ''), number: number + 1 })];
 }
@@ -54,6 +61,19 @@ function check(line: TextLine): TextLine {
     );
   }
   return line;
+}
+
+function decoderOf(start: Uint8Array, onEncoding: (name: string) => void): TextDecoder {
+  const encoding = detectEncoding(start);
+  onEncoding(encoding);
+  return new TextDecoder(encoding);
+}
+
+function joined(a: Uint8Array, b: Uint8Array): Uint8Array {
+  const both = new Uint8Array(a.byteLength + b.byteLength);
+  both.set(a);
+  both.set(b, a.byteLength);
+  return both;
 }
 
 /** By its mark; without one UTF-8 where the first chunk is, otherwise Latin-1 with the marks of Windows. */
