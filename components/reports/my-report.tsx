@@ -7,7 +7,7 @@ import { PageTitle } from '@/components/layout/headings';
 import { Sheet } from '@/components/layout/sheet';
 import { ReportBody } from '@/components/reports/reading/report-body';
 import { ReportFacts } from '@/components/reports/reading/report-facts';
-import { Button } from '@/components/ui/button';
+import { Button, LinkButton } from '@/components/ui/button';
 import { Dialog, DialogClose } from '@/components/ui/dialog';
 import { Skeleton } from '@/components/ui/skeleton';
 import { callApi } from '@/lib/platform/http/call-api';
@@ -15,7 +15,7 @@ import { reportView, STATE_WORDS, type ReportView } from '@/lib/reports/schema';
 
 const NEXT: Partial<Record<ReportView['state'], string>> = {
   submitted: 'A moderator will look at it; you hear by mail what comes of it. New members’ reports come first.',
-  'changes-requested': 'The remarks below say what to change. Write an amended report when you have measured again.',
+  'changes-requested': 'The remarks below say what to change. Measure again with them in mind, and send a new report.',
   verified: 'It counts in the published figures of its device and category.',
   declined: 'The reason stands below. A new measurement is welcome.',
   withdrawn: 'You took it back; it counts nowhere any more.',
@@ -63,6 +63,11 @@ export function MyReport({ publicId }: { publicId: string }) {
           <Link href={`/devices/${report.device.slug}`} className="text-lichen underline underline-offset-4">
             See what it changed
           </Link>
+        )}
+        {(report.state === 'changes-requested' || report.state === 'declined') && (
+          <LinkButton look="main" href={`/reports/new?device=${report.device.publicId}`}>
+            Measure again
+          </LinkButton>
         )}
         {mayWithdraw && (
           <Dialog
