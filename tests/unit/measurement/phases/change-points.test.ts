@@ -81,6 +81,11 @@ describe('search for changes', () => {
     );
   });
 
+  it('keeps a start that is beaten until a whole segment fits behind what beats it', () => {
+    const values = [3, 5, 7, 2, 1, 6, 3, 2, 7, 4, 5, 3, 0, 7, 3, 5, 1, 4, 9];
+    expect(costOf(values, changePoints(values, 0.1, 4), 0.1)).toBeCloseTo(bruteForce(values, 0.1, 4), 9);
+  });
+
   it('never gains by moving: a shift of the whole series changes nothing', () => {
     expect(
       changePoints(
