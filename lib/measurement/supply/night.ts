@@ -22,7 +22,6 @@ export function nightShare(
 
 function pieces({ fromHour, toHour }: { fromHour: number; toHour: number }): { from: number; to: number }[] {
   const [from, to] = [fromHour % DAY_HOURS, toHour % DAY_HOURS];
-  if (from === to) return [{ from: 0, to: DAY_HOURS }];
   if (from < to) return [{ from, to }];
   return [
     { from, to: DAY_HOURS },
